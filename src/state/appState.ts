@@ -1,0 +1,82 @@
+import type { Candidate } from '../../workers/contract/candidate.ts';
+import type { Dialect } from '../../workers/contract/dialect.ts';
+import type { Judgement } from '../../workers/contract/diagnostics.ts';
+import type { View } from '../../workers/contract/envelope.ts';
+import type { Failure } from '../../workers/contract/failures.ts';
+import type { Fit } from '../../workers/contract/fit.ts';
+import type { Prediction } from '../../workers/contract/prediction.ts';
+import type { ReadAnswer, ReadRecord } from '../../workers/contract/reading.ts';
+import type { Repair, Span } from '../../workers/contract/series.ts';
+
+/** How far a candidate row has come. `grey` is the result it had before the last edit, kept beside the new one. */
+export type RowProgress =
+  | { readonly kind: 'waiting' }
+  | { readonly kind: 'fitting' }
+  | { readonly kind: 'fitted'; readonly fit: Fit; readonly judgement: Judgement | null }
+  | { readonly kind: 'failed'; readonly failure: Failure };
+
+export interface Row {
+  readonly id: string;
+  readonly candidate: Candidate;
+  readonly progress: RowProgress;
+  readonly grey: Fit | null;
+}
+
+/** A file being looked at before a record is taken from it. */
+export interface Arrival {
+  readonly fileName: string;
+  readonly fileHash: string;
+  readonly text: string;
+  /** Settings the person changed; the rest is detected. */
+  readonly settings: Partial<Dialect>;
+  /** null while it is being read. */
+  readonly answer: ReadAnswer | null;
+  readonly fraction: number;
+}
+
+/** Where a record's readings are. `wanted`: the session came from a link and the file has not been given yet. */
+export type Source =
+  | {
+      readonly kind: 'loaded';
+      readonly fileName: string;
+      readonly text: string;
+      readonly record: ReadRecord;
+      /** One of the invented examples that come with the page. */
+      readonly example: boolean;
+    }
+  | { readonly kind: 'wanted' };
+
+export interface RecordState {
+  readonly id: string;
+  readonly fileHash: string;
+  readonly seriesHash: string;
+  readonly dialect: Dialect;
+  readonly repairs: readonly Repair[];
+  readonly window: Span;
+  readonly holdOut: Span | null;
+  readonly rows: readonly Row[];
+  readonly source: Source;
+}
+
+/** A message to the person; stays until dismissed. `failure` says what, where and what to do through `format`. */
+export interface Notice {
+  readonly id: string;
+  readonly tone: 'trouble' | 'note';
+  readonly failure: Failure | null;
+  readonly text: string;
+}
+
+export interface AppState {
+  readonly records: readonly RecordState[];
+  /** Id of the active record; null shows the empty sheet. */
+  readonly active: string | null;
+  readonly view: View;
+  readonly arrival: Arrival | null;
+  readonly notices: readonly Notice[];
+  readonly undoDepth: number;
+  readonly redoDepth: number;
+  /** Prediction for the chosen candidate, or null where none was asked for yet. */
+  readonly prediction: { readonly rowId: string; readonly prediction: Prediction } | null;
+  /** True until an autosaved session or the link has been looked at. */
+  readonly opening: boolean;
+}

@@ -1,0 +1,83 @@
+/**
+ * Expected failures: a code and the numbers needed to explain it. Row and column numbers are counted from 1 as a
+ * person sees them in the file; indices into a record are counted from 0. The words are in `src/format`.
+ */
+export type Failure =
+  | { readonly code: 'internal'; readonly message: string }
+  | { readonly code: 'cancelled' }
+  | { readonly code: 'workerDied'; readonly reason: string }
+  | { readonly code: 'timeout'; readonly seconds: number }
+  | { readonly code: 'notFinite'; readonly what: string; readonly index: number }
+  | { readonly code: 'badCandidate'; readonly field: string; readonly reason: BadCandidateReason }
+  | {
+      readonly code: 'tooFewReadings';
+      readonly readings: number;
+      readonly needed: number;
+      readonly coefficients: number;
+    }
+  | { readonly code: 'noVariation'; readonly value: number; readonly afterDifferencing: boolean }
+  | { readonly code: 'deterministic'; readonly spread: number; readonly resolution: number }
+  | { readonly code: 'conditionalWithGaps'; readonly gaps: number }
+  | { readonly code: 'estimatorNeedsPureAr'; readonly estimator: string }
+  | { readonly code: 'estimatorNeedsNoGaps'; readonly estimator: string; readonly gaps: number }
+  | {
+      readonly code: 'transformDomain';
+      readonly transform: string;
+      readonly index: number;
+      readonly value: number;
+      readonly count: number;
+    }
+  | { readonly code: 'columnNotEstimable'; readonly column: string; readonly reason: ColumnReason }
+  | { readonly code: 'columnMissing'; readonly column: string }
+  | { readonly code: 'columnLength'; readonly column: string; readonly length: number; readonly needed: number }
+  | { readonly code: 'columnGap'; readonly column: string; readonly index: number }
+  | { readonly code: 'searchFailed'; readonly starts: number }
+  | { readonly code: 'noAdmissibleMaximum'; readonly logLikelihood: number }
+  | { readonly code: 'startingValuesLost'; readonly observed: number; readonly needed: number }
+  | ReadingFailure;
+
+export type BadCandidateReason =
+  | 'notAWholeNumber'
+  | 'negative'
+  | 'tooLarge'
+  | 'seasonTooShort'
+  | 'seasonMissing'
+  | 'meanWithDifferencing'
+  | 'driftWithoutDifferencing'
+  | 'zeroLagOutOfRange'
+  | 'parameterLength'
+  | 'variance'
+  | 'window'
+  | 'nonstationary'
+  | 'eventOutside'
+  | 'transform';
+
+export type ColumnReason = 'annihilated' | 'inGap' | 'collinear';
+
+/** What can be wrong with a file. `line` is counted from 1 in the file, `column` from 1. */
+export type ReadingFailure =
+  | { readonly code: 'emptyFile' }
+  | { readonly code: 'binaryFile'; readonly kind: string }
+  | { readonly code: 'fileTooLarge'; readonly bytes: number; readonly limit: number }
+  | {
+      readonly code: 'noNumbers';
+      readonly lines: number;
+      readonly example: string;
+      readonly line: number;
+      readonly column: number;
+    }
+  | { readonly code: 'noSuchColumn'; readonly column: number; readonly columns: number }
+  | { readonly code: 'tooFewRows'; readonly readings: number; readonly needed: number }
+  | { readonly code: 'allGaps'; readonly column: string; readonly rows: number }
+  | { readonly code: 'constantColumn'; readonly column: string; readonly value: number }
+  | {
+      readonly code: 'badStamp';
+      readonly line: number;
+      readonly column: number;
+      readonly text: string;
+      readonly count: number;
+    }
+  | { readonly code: 'ambiguousDates'; readonly line: number; readonly text: string }
+  | { readonly code: 'noRegularAxis'; readonly rows: number; readonly interval: number; readonly offGrid: number }
+  | { readonly code: 'gridTooLong'; readonly places: number; readonly limit: number; readonly line: number }
+  | { readonly code: 'unclosedQuote'; readonly line: number };

@@ -1,0 +1,24 @@
+import type { FitRequest } from './candidate.ts';
+import type { DiagnoseRequest, Judgement } from './diagnostics.ts';
+import type { Failure } from './failures.ts';
+import type { Fit } from './fit.ts';
+import type { Prediction, PredictRequest } from './prediction.ts';
+import type { ReadAnswer, ReadRequest } from './reading.ts';
+import type { Result } from './result.ts';
+
+/** Every worker answers `ready` once its code has loaded. */
+interface Readiness {
+  ready(): true;
+}
+
+/** `workers/entry/modelling.worker.ts`: fits, evidence with verdict and predictions of one candidate. */
+export interface ModellingApi extends Readiness {
+  fit(request: FitRequest): Result<Fit>;
+  diagnose(request: DiagnoseRequest): Result<Judgement>;
+  predict(request: PredictRequest): Result<Prediction>;
+}
+
+/** `workers/entry/reading.worker.ts`: a file's text to a record. `progress` is a Comlink proxy, called with 0…1. */
+export interface ReadingApi extends Readiness {
+  read(request: ReadRequest, progress?: (fraction: number) => void): ReadAnswer;
+}
