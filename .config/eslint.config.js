@@ -74,7 +74,7 @@ export default tseslint.config(
     extends: [...tseslint.configs.strictTypeChecked],
     languageOptions: {
       parserOptions: {
-        projectService: { allowDefaultProject: ['vite.config.ts'] },
+        projectService: true,
         tsconfigRootDir: new URL('..', import.meta.url).pathname,
       },
     },

@@ -2,7 +2,7 @@
 import { spawnSync } from 'node:child_process';
 import { existsSync } from 'node:fs';
 
-const rooms = ['workers', 'workers/entry', 'src', 'src/pure.tsconfig.json', 'test', 'e2e'];
+const rooms = ['tsconfig.json', 'workers', 'workers/entry', 'src', 'src/pure.tsconfig.json', 'test', 'e2e'];
 let failed = 0;
 for (const room of rooms.filter((path) => existsSync(path))) {
   const { status } = spawnSync(process.execPath, ['node_modules/typescript/bin/tsc', '-p', room], { stdio: 'inherit' });
