@@ -1,0 +1,40 @@
+import { expect, test } from '@playwright/test';
+import { dropFile } from './support/records.ts';
+
+const row = (index: number, value: string) =>
+  `2024-05-01 ${String(Math.floor(index / 60)).padStart(2, '0')}:${String(index % 60).padStart(2, '0')},${value}`;
+const csv = (values: string[]) => ['time,flow', ...values.map((value, index) => row(index, value))].join('\n');
+
+/** Each: what a person might drop by mistake, and words the message must hold (what, where or what to do). */
+const cases: { name: string; text: string; says: RegExp }[] = [
+  { name: 'empty.csv', text: '', says: /empty/i },
+  {
+    name: 'photo.jpg',
+    text: '\u00ff\u00d8\u00ff\u00e0\u0000\u0010JFIF\u0000\u0001',
+    says: /not a text|picture|binary|photo/i,
+  },
+  { name: 'words.csv', text: ['remark', 'pump off', 'valve stuck', 'all well'].join('\n'), says: /number/i },
+  { name: 'three.csv', text: csv(['1.5', '1.7', '1.6']), says: /3 readings/i },
+  { name: 'constant.csv', text: csv(Array.from({ length: 40 }, () => '7.0')), says: /same|constant|variation/i },
+  { name: 'allgaps.csv', text: csv(Array.from({ length: 40 }, () => '')), says: /gap|no number|numbers/i },
+];
+
+for (const { name, text, says } of cases) {
+  test(`${name} gets a clear message and the work so far is kept`, async ({ page }) => {
+    await page.goto('/');
+    const table = page.getByRole('table', { name: 'Candidates' });
+    await expect(table.getByText(/fitted/i)).toHaveCount(3);
+    await dropFile(page, name, text);
+    await expect(page.getByText(says).first()).toBeVisible();
+    await expect(table.getByText(/fitted/i)).toHaveCount(3);
+  });
+}
+
+test('a damaged or foreign link leaves a working page and says so', async ({ page }) => {
+  for (const hash of ['#s1.AAAA_not-a-session', '#section-3', '#s1.' + 'x'.repeat(5000)]) {
+    await page.goto('about:blank');
+    await page.goto(`/${hash}`);
+    await expect(page.getByText(/link/i).first()).toBeVisible();
+    await expect(page.getByRole('button', { name: 'Open record' })).toBeEnabled();
+  }
+});
