@@ -1,0 +1,110 @@
+import { minimise } from '../../numeric/minimise.ts';
+import type { Coefficients, SearchSpace } from './searchSpace.ts';
+
+/** ln L with everything but the coefficients profiled out; writes its gradient with respect to all coefficients. */
+export type ProfileLikelihood = (coefficients: Coefficients, gradient: Float64Array) => number;
+
+/** What is searched: the space, the likelihood on it, and how many readings it rests on. */
+export interface Terrain {
+  readonly space: SearchSpace;
+  readonly likelihood: ProfileLikelihood;
+  readonly readings: number;
+  /** Season length, or 0. */
+  readonly season: number;
+}
+
+/** Where a climb ended. `held[i]` is ±1 where coordinate i is held there (a face), 0 where it is free. */
+export interface Landing {
+  readonly x: Float64Array;
+  readonly held: Int8Array;
+  readonly logLikelihood: number;
+  readonly status: 'converged' | 'stalled' | 'iterationLimit' | 'startOutside';
+  /** Largest component of the gradient with respect to the free search coordinates. */
+  readonly gradientNorm: number;
+  /** Inverse Hessian of −ln L over the free search coordinates, as the quasi-Newton method left it. */
+  readonly inverseHessian: Float64Array;
+  readonly iterations: number;
+  readonly evaluations: number;
+}
+
+export interface ClimbOptions {
+  readonly maximumIterations: number;
+  /** Gain in ln L still predicted at which a climb is done. */
+  readonly gain: number;
+}
+
+/** A Fisher-transformed partial beyond this is on the circle to ten digits. */
+const FARTHEST = 12;
+
+/**
+ * Climbs to a local maximum of ln L over the free coordinates, partial autocorrelations being searched as
+ * u = artanh r (Fisher's transform, in which the likelihood is nearly quadratic with curvature near n).
+ *
+ * @param terrain space and likelihood
+ * @param from coordinates of the start
+ * @param held ±1 for coordinates held on a face, 0 elsewhere
+ */
+export function climb(terrain: Terrain, from: Float64Array, held: Int8Array, options: ClimbOptions): Landing {
+  const free = freeCoordinates(held);
+  const slope = climbSlope(terrain, held);
+  const start = Float64Array.from(free, (i) => toSearch(terrain.space, i, from[i]!));
+  const end = minimise(slope.objective, start, {
+    inverseHessian: 1 / terrain.readings,
+    decrease: options.gain,
+    maximumIterations: options.maximumIterations,
+    longestStep: 1.5,
+  });
+  return {
+    x: slope.coordinates(end.at),
+    held,
+    logLikelihood: -end.value,
+    status: end.status,
+    gradientNorm: end.gradientNorm,
+    inverseHessian: end.inverseHessian,
+    iterations: end.iterations,
+    evaluations: end.evaluations,
+  };
+}
+
+export function freeCoordinates(held: Int8Array): number[] {
+  return Array.from({ length: held.length }, (_, i) => i).filter((i) => held[i] === 0);
+}
+
+/** −ln L and its gradient over the free search coordinates u, for `minimise`. */
+export function climbSlope(terrain: Terrain, held: Int8Array) {
+  const { space, likelihood } = terrain;
+  const free = freeCoordinates(held);
+  const partial = free.map((i) => space.isPartial(i));
+  const x = Float64Array.from(held);
+  const byCoefficient = new Float64Array(space.coefficients.all.length);
+  const byCoordinate = new Float64Array(space.dimension);
+  const settle = (u: Float64Array) => {
+    for (let k = 0; k < free.length; k++) x[free[k]!] = partial[k] === true ? Math.tanh(u[k]!) : u[k]!;
+  };
+  return {
+    objective: (u: Float64Array, gradient: Float64Array): number => {
+      for (let k = 0; k < free.length; k++) if (partial[k] === true && Math.abs(u[k]!) > FARTHEST) return Infinity;
+      settle(u);
+      if (!space.place(x)) return Infinity;
+      const value = likelihood(space.coefficients, byCoefficient);
+      if (!Number.isFinite(value)) return Infinity;
+      space.pullBack(byCoefficient, byCoordinate);
+      for (let k = 0; k < free.length; k++) {
+        const i = free[k]!;
+        gradient[k] = -byCoordinate[i]! * (partial[k] === true ? 1 - x[i]! * x[i]! : 1);
+      }
+      return -value;
+    },
+    coordinates: (u: Float64Array): Float64Array => {
+      settle(u);
+      return x.slice();
+    },
+  };
+}
+
+/** Search coordinate of a partial autocorrelation, kept off ±1 so that a start there can move. */
+export function toSearch(space: SearchSpace, i: number, x: number): number {
+  if (!space.isPartial(i)) return x;
+  const inside = Math.max(-0.9995, Math.min(0.9995, x));
+  return Math.atanh(inside);
+}
