@@ -33,6 +33,8 @@ export interface ClimbOptions {
   readonly gain: number;
 }
 
+/** A start this near to the circle could not move: the transform is too flat there. */
+const START_MARGIN = 5e-4;
 /** A Fisher-transformed partial beyond this is on the circle to ten digits. */
 const FARTHEST = 12;
 
@@ -47,7 +49,7 @@ const FARTHEST = 12;
 export function climb(terrain: Terrain, from: Float64Array, held: Int8Array, options: ClimbOptions): Landing {
   const free = freeCoordinates(held);
   const slope = climbSlope(terrain, held);
-  const start = Float64Array.from(free, (i) => toSearch(terrain.space, i, from[i]!));
+  const start = Float64Array.from(free, (i) => toSearch(terrain.space, i, from[i]!, START_MARGIN));
   const end = minimise(slope.objective, start, {
     inverseHessian: 1 / terrain.readings,
     decrease: options.gain,
@@ -102,9 +104,7 @@ export function climbSlope(terrain: Terrain, held: Int8Array) {
   };
 }
 
-/** Search coordinate of a partial autocorrelation, kept off ±1 so that a start there can move. */
-export function toSearch(space: SearchSpace, i: number, x: number): number {
-  if (!space.isPartial(i)) return x;
-  const inside = Math.max(-0.9995, Math.min(0.9995, x));
-  return Math.atanh(inside);
+/** Search coordinate of coordinate i; partial autocorrelations nearer than `margin` to ±1 are drawn in so far. */
+export function toSearch(space: SearchSpace, i: number, x: number, margin: number): number {
+  return space.isPartial(i) ? Math.atanh(Math.max(margin - 1, Math.min(1 - margin, x))) : x;
 }

@@ -142,6 +142,19 @@ export class SearchSpace {
     return x;
   }
 
+  /** Whether `coefficients` as they stand are stationary and invertible, strictly. */
+  isInside(): boolean {
+    return this.factors.every(({ coefficients, signed, partials, sign }) => {
+      for (let i = 0; i < signed.length; i++) signed[i] = sign * coefficients[i]!;
+      return inversePartialMap(signed, partials);
+    });
+  }
+
+  /** Indices into `coefficients.all` of the coefficients that are estimated, in order. */
+  estimated(): number[] {
+    return this.factors.flatMap(({ at, lags }) => lags.map((lag) => at + lag));
+  }
+
   /** True where coordinate i is a partial autocorrelation of an MA factor, which may lie on ±1. */
   mayReachCircle(i: number): boolean {
     const factor = this.factorOf(i);
