@@ -11,6 +11,8 @@ export interface MinimiseOptions {
   readonly maximumIterations: number;
   /** Longest step allowed in any one coordinate. */
   readonly longestStep: number;
+  /** Asked after every iteration: true ends the search as `abandoned`. */
+  readonly abandon?: (at: Float64Array, iterations: number) => boolean;
 }
 
 export interface Minimum {
@@ -23,7 +25,7 @@ export interface Minimum {
   readonly iterations: number;
   readonly evaluations: number;
   /** `stalled`: no step reduced the objective although one was predicted to. `startOutside`: not finite at the start. */
-  readonly status: 'converged' | 'stalled' | 'iterationLimit' | 'startOutside';
+  readonly status: 'converged' | 'stalled' | 'iterationLimit' | 'startOutside' | 'abandoned';
 }
 
 /**
@@ -83,6 +85,7 @@ export function minimise(objective: Objective, start: Float64Array, options: Min
     value = found.value;
     updateInverse(inverse, direction, found.step, gradientChange, product);
     fresh = false;
+    if (options.abandon?.(at, iterations) === true) status = 'abandoned';
   }
   return {
     at,

@@ -1,4 +1,4 @@
-import { minimise } from '../../numeric/minimise.ts';
+import { minimise, type Minimum } from '../../numeric/minimise.ts';
 import type { Coefficients, SearchSpace } from './searchSpace.ts';
 
 /** ln L with everything but the coefficients profiled out; writes its gradient with respect to all coefficients. */
@@ -18,7 +18,8 @@ export interface Landing {
   readonly x: Float64Array;
   readonly held: Int8Array;
   readonly logLikelihood: number;
-  readonly status: 'converged' | 'stalled' | 'iterationLimit' | 'startOutside';
+  /** `abandoned`: the climb ran to the circle with an AR root, where no admissible maximum is. */
+  readonly status: Minimum['status'];
   /** Largest component of the gradient with respect to the free search coordinates. */
   readonly gradientNorm: number;
   /** Inverse Hessian of −ln L over the free search coordinates, as the quasi-Newton method left it. */
@@ -35,6 +36,9 @@ export interface ClimbOptions {
 
 /** A start this near to the circle could not move: the transform is too flat there. */
 const START_MARGIN = 5e-4;
+/** Iterations after which a climb is given up if it runs along an AR root on the circle; how near that is, times n. */
+const PATIENCE = 20;
+const AR_CIRCLE = 0.02;
 /** A Fisher-transformed partial beyond this is on the circle to ten digits. */
 const FARTHEST = 12;
 
@@ -55,6 +59,7 @@ export function climb(terrain: Terrain, from: Float64Array, held: Int8Array, opt
     decrease: options.gain,
     maximumIterations: options.maximumIterations,
     longestStep: 1.5,
+    abandon: (u, iterations) => iterations >= PATIENCE && nearCircle(terrain, free, u),
   });
   return {
     x: slope.coordinates(end.at),
@@ -66,6 +71,11 @@ export function climb(terrain: Terrain, from: Float64Array, held: Int8Array, opt
     iterations: end.iterations,
     evaluations: end.evaluations,
   };
+}
+
+/** Whether an AR partial is so near to ±1 that only a cancelling MA root can have drawn it there. */
+function nearCircle({ space, readings }: Terrain, free: readonly number[], u: Float64Array): boolean {
+  return free.some((i, k) => space.isAr(i) && 1 - Math.abs(Math.tanh(u[k]!)) < AR_CIRCLE / readings);
 }
 
 export function freeCoordinates(held: Int8Array): number[] {

@@ -123,7 +123,8 @@ class Survey {
     const summits = this.found
       .map(({ landing, reached }) => {
         space.place(landing.x);
-        return { landing, reached, admissible: isAdmissible(space.coefficients, season) };
+        const admissible = landing.status !== 'abandoned' && isAdmissible(space.coefficients, season);
+        return { landing, reached, admissible };
       })
       .sort((one, other) => other.landing.logLikelihood - one.landing.logLikelihood);
     return { summits, starts: this.starts, iterations: this.iterations, evaluations: this.evaluations };

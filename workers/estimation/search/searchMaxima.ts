@@ -14,7 +14,7 @@ const WITHIN = 2;
  * @param terrain space and profile likelihood
  * @param centred the (differenced, transformed) record less its level, for starting values
  * @param request seed, effort and further starts
- * @returns maxima, highest first
+ * @returns maxima, highest first; of the inadmissible ones only those above the best admissible one
  */
 export function searchMaxima(
   terrain: Terrain,
@@ -40,10 +40,10 @@ function ridges({ space }: Terrain, candidate: Candidate, given: readonly Parame
 function withPolish(terrain: Terrain, found: Exploration): Exploration {
   const best = found.summits.find(({ admissible }) => admissible) ?? found.summits[0];
   if (best === undefined) return found;
-  const floor = best.landing.logLikelihood - WITHIN;
+  const top = best.landing.logLikelihood;
   let evaluations = found.evaluations;
   const summits = found.summits
-    .filter(({ landing }) => landing.logLikelihood >= floor)
+    .filter(({ landing, admissible }) => landing.logLikelihood >= (admissible ? top - WITHIN : top))
     .map((summit) => {
       if (!summit.admissible) return summit;
       const landing = polish(terrain, summit.landing);

@@ -166,6 +166,12 @@ export class SearchSpace {
     return this.factorOf(i).kind === 'partial';
   }
 
+  /** True where coordinate i is a partial autocorrelation of an AR factor. */
+  isAr(i: number): boolean {
+    const factor = this.factorOf(i);
+    return !factor.ma && factor.kind === 'partial';
+  }
+
   isSeasonal(i: number): boolean {
     return this.factorOf(i).seasonal;
   }
