@@ -11,6 +11,8 @@ export interface ColumnProfile {
   readonly gaps: number;
   readonly texts: number;
   readonly role: 'time' | 'clock' | 'value' | 'tag' | 'status' | 'text' | 'empty';
+  /** The distinct texts of a column that holds few of them, such as a status or a tag column. */
+  readonly words?: readonly string[];
 }
 
 /** One row of the preview, cells as they stand in the file, with how the value and stamp were read. */
@@ -41,16 +43,23 @@ export interface ReadingNote {
     | 'overlappingFiles'
     | 'clockChange'
     | 'offGrid'
-    | 'digitsLost';
+    | 'digitsLost'
+    /** Rows whose stamp could not be read; they are left out. */
+    | 'badStamps'
+    /** Cells such as `<0.05`: below a detection limit, kept as gaps. */
+    | 'belowLimit';
   readonly count: number;
   readonly lines: readonly number[];
   /** First texts concerned, where there are any. */
   readonly texts: readonly string[];
 }
 
-/** A guess that the person should confirm. */
+/**
+ * A guess that the person should confirm. The first option is the one in use. Options are values of the setting they
+ * answer: forms of `stamp`, decimal marks, columns counted from 0 (as text), tags.
+ */
 export interface Question {
-  readonly about: 'dateOrder' | 'decimal' | 'valueColumn' | 'timeColumn';
+  readonly about: 'dateOrder' | 'decimal' | 'valueColumn' | 'timeColumn' | 'tag';
   readonly options: readonly string[];
 }
 
@@ -62,6 +71,8 @@ export interface Sniffed {
   readonly worst: readonly PreviewRow[];
   readonly rows: number;
   readonly questions: readonly Question[];
+  /** In the long layout: the tags found, in the order of their first row. */
+  readonly tags?: readonly string[];
 }
 
 /** A file read by one dialect. `columns` holds the other numeric columns on the same grid, by column name. */

@@ -1,7 +1,8 @@
 /**
  * Where the readings stand in time. `seconds`: `start` is epoch seconds of the plant clock and `step` seconds;
  * `months`: `start` counts months since January 1970 and `step` is in months; `index`: no time, readings are numbered
- * from `start`. `zone` is an IANA name, or null for the plant clock as logged (no daylight saving).
+ * from `start`. `zone` is an IANA name, and then `start` is true epoch seconds; null is the plant clock as logged (no
+ * daylight saving), and then `start` counts the seconds that clock shows. Formatted in `zone ?? 'UTC'` both read right.
  */
 export interface Axis {
   readonly kind: 'seconds' | 'months' | 'index';

@@ -1,6 +1,5 @@
 import type { FitRequest } from './candidate.ts';
 import type { DiagnoseRequest, Judgement } from './diagnostics.ts';
-import type { Failure } from './failures.ts';
 import type { Fit } from './fit.ts';
 import type { Prediction, PredictRequest } from './prediction.ts';
 import type { ReadAnswer, ReadRequest } from './reading.ts';
