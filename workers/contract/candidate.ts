@@ -67,6 +67,8 @@ export interface Parameters {
   readonly mean: number;
   readonly regression: readonly number[];
   readonly innovationVariance: number;
+  /** Box–Cox λ where the candidate estimates it. */
+  readonly lambda?: number;
 }
 
 /** What a fit is asked for. `values` is the whole record; `window` the part used (all of it when left out). */

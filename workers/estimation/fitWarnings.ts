@@ -10,14 +10,11 @@ export interface WarningGrounds {
   readonly candidate: Candidate;
   readonly coefficients: Coefficients;
   readonly readings: number;
-  readonly parameterCount: number;
   readonly found: Exploration;
   readonly best: Summit;
   readonly covariance: CovarianceEnd | null;
   /** Indices into `coefficients.all` of the estimated ones, the order of the covariance. */
   readonly rows: readonly number[];
-  /** Size of the level of the record against its spread. */
-  readonly offsetRatio: number;
   /** Variance of the record before its last difference and after it, and the lag-one autocorrelation after it. */
   readonly differencing: { readonly before: number; readonly after: number; readonly lagOne: number } | null;
 }
@@ -26,12 +23,8 @@ export interface WarningGrounds {
 const NEAR_UNIT = 7;
 /** From this MA modulus on, a differenced record is called over-differenced (common practice). */
 const OVER_DIFFERENCED = 0.97;
-/** Fewer readings than this for each parameter are few (common practice: 5 to 10). */
-const READINGS_PER_PARAMETER = 7;
 /** Observed and asymptotic standard errors further apart than this factor disagree. */
 const DISAGREEMENT = 2;
-/** Digits are lost in the input itself where its level is this many times its spread. */
-const OFFSET = 1e7;
 /** Maxima this close in ln L cannot be told apart by the data. */
 const WITHIN = 2;
 /** A pair this near the circle and to each other is suspect in a short record, though admissible. */
@@ -44,12 +37,7 @@ const SHORT = 200;
  * @returns warnings, most serious first; each with the numbers needed to say it
  */
 export function fitWarnings(grounds: WarningGrounds): Warning[] {
-  return [
-    ...searchWarnings(grounds),
-    ...rootWarnings(grounds),
-    ...curvatureWarnings(grounds),
-    ...recordWarnings(grounds),
-  ];
+  return [...searchWarnings(grounds), ...rootWarnings(grounds), ...curvatureWarnings(grounds)];
 }
 
 function searchWarnings({ found, best }: WarningGrounds): Warning[] {
@@ -74,7 +62,6 @@ function rootWarnings({ candidate, coefficients, readings, best, covariance, row
   const warnings: Warning[] = [];
   const { order } = candidate;
   const ar = largestArModulus(coefficients, order.s);
-  const ma = largestMaModulus(coefficients, order.s);
   if (ar > 1 - NEAR_UNIT / readings) {
     warnings.push({ code: 'nearUnitAr', numbers: { modulus: ar, limit: 1 - NEAR_UNIT / readings, readings } });
   }
@@ -97,7 +84,6 @@ function rootWarnings({ candidate, coefficients, readings, best, covariance, row
   if (close !== null && close.distance <= SUSPECT && readings < SHORT) {
     warnings.push({ code: 'spuriousPair', numbers: { ...close, excluded: 0 } });
   }
-  if (ma >= 1) return warnings;
   return warnings;
 }
 
@@ -118,21 +104,4 @@ function curvatureWarnings({ covariance, best }: WarningGrounds): Warning[] {
     return [{ code: 'informationDisagrees', numbers: { ratio: covariance.ratio } }];
   }
   return [];
-}
-
-function recordWarnings({ readings, parameterCount, offsetRatio }: WarningGrounds): Warning[] {
-  const warnings: Warning[] = [];
-  if (readings < READINGS_PER_PARAMETER * parameterCount) {
-    warnings.push({
-      code: 'fewReadings',
-      numbers: { readings, parameters: parameterCount, wanted: READINGS_PER_PARAMETER * parameterCount },
-    });
-  }
-  if (offsetRatio > OFFSET) {
-    warnings.push({
-      code: 'digitsLost',
-      numbers: { ratio: offsetRatio, digits: Math.floor(Math.log10(offsetRatio)) },
-    });
-  }
-  return warnings;
 }
