@@ -1,0 +1,190 @@
+import type { Order } from '../../contract/candidate.ts';
+import { expandPolynomials, sparsePolynomial, type Factors } from '../../model/expandPolynomials.ts';
+import type { FastEngine } from './fastEngine.ts';
+import { factorStep } from './numericGradient.ts';
+import type { Profile } from './profileGls.ts';
+import { backward, StartEffect } from './startEffect.ts';
+import { adjointRecursion } from './steadyRecursion.ts';
+
+/**
+ * Gradient of the concentrated ln L by the adjoint of the recursion.
+ *
+ * With ê the innovations of the regression residual r that start from the most likely past ĝ, and c their adjoint recursion, the sum of
+ * squares changes by −2 Σ c_t r_{t−i} with a multiplied-out φ_i, by −2 Σ c_t ê_{t−j} with θ_j, and by −c′(dC)c over its first m places with
+ * the covariance of the past (the envelope theorem: ĝ, β̂ and σ̂² do not contribute). Only dC and d ln|V|, which do not touch the record,
+ * are differenced numerically. Costs about two evaluations.
+ */
+export class FastGradient {
+  private readonly residual: Float64Array;
+  private readonly shocks: Float64Array;
+  private readonly adjoint: Float64Array;
+  private readonly near: StartEffect;
+  private readonly byAr: Float64Array;
+  private readonly byMa: Float64Array;
+
+  constructor(
+    private readonly engine: FastEngine,
+    private readonly order: Order,
+    private readonly readings: number,
+  ) {
+    const { observed: n, pad } = engine;
+    this.residual = new Float64Array(n + pad);
+    this.shocks = new Float64Array(n + pad);
+    this.adjoint = new Float64Array(n + 2 * pad);
+    this.near = new StartEffect(n, pad);
+    this.byAr = new Float64Array(order.p + order.s * order.P + 1);
+    this.byMa = new Float64Array(order.q + order.s * order.Q + 1);
+  }
+
+  /** After the engine has evaluated `factors` and the profile was solved. */
+  write(factors: Factors, profile: Profile, gradient: Float64Array): void {
+    const { engine, readings, residual, shocks, adjoint } = this;
+    const { start, pad, observed: n } = engine;
+    this.combine(profile.beta);
+    const first = this.addPast(profile.beta);
+    adjointRecursion(shocks, adjoint, pad, n, engine.sparseMa);
+    const scale = readings / profile.rss;
+    this.byLag(factors.ar, factors.seasonalAr, residual, this.byAr, scale);
+    this.byLag(factors.ma, factors.seasonalMa, shocks, this.byMa, scale);
+    const { p, q, P, Q, s } = this.order;
+    chain(factors.seasonalAr, p, s, -1, this.byAr, gradient, 0);
+    chain(factors.seasonalMa, q, s, 1, this.byMa, gradient, p);
+    chainSeasonal(factors.ar, P, s, -1, this.byAr, gradient, p + q);
+    chainSeasonal(factors.ma, Q, s, 1, this.byMa, gradient, p + q + P);
+    if (start.m > 0) this.addStart(factors, first, scale, gradient);
+  }
+
+  /** r and e⁰ of the regression residual. */
+  private combine(beta: Float64Array): void {
+    const { engine, residual, shocks } = this;
+    residual.set(engine.series[0]!);
+    shocks.set(engine.innovations[0]!);
+    beta.forEach((value, i) => {
+      const column = engine.series[i + 1]!;
+      const filtered = engine.innovations[i + 1]!;
+      for (let t = 0; t < residual.length; t++) {
+        residual[t]! -= value * column[t]!;
+        shocks[t]! -= value * filtered[t]!;
+      }
+    });
+  }
+
+  /** Adds H ĝ to the innovations and returns c over the first m places, c = L M⁻¹ y. */
+  private addPast(beta: Float64Array): Float64Array {
+    const { engine, shocks } = this;
+    const { start, pad } = engine;
+    const { m, gram, mixed, covariance, impulse } = start;
+    const v = engine.shrunk[0]!.slice();
+    beta.forEach((value, i) => engine.shrunk[i + 1]!.forEach((one, k) => (v[k]! -= value * one)));
+    backward(mixed, m, v);
+    const c = new Float64Array(m);
+    for (let i = 0; i < m; i++) for (let k = 0; k <= i; k++) c[i]! += gram[i * m + k]! * v[k]!;
+    for (let i = 0; i < m; i++) {
+      let g = 0;
+      for (let k = 0; k < m; k++) g -= covariance[i * m + k]! * c[k]!;
+      const steps = Math.min(engine.observed - i, start.reach);
+      for (let t = 0; t < steps; t++) shocks[pad + i + t]! += impulse[t]! * g;
+    }
+    return c;
+  }
+
+  /** Σ c_t x_{t−lag}·scale for every lag the factors can reach. */
+  private byLag(
+    plain: ArrayLike<number>,
+    seasonal: ArrayLike<number>,
+    x: Float64Array,
+    by: Float64Array,
+    scale: number,
+  ): void {
+    const { pad, observed: n } = this.engine;
+    const { s } = this.order;
+    for (let j = 0; j <= seasonal.length; j++) {
+      for (let i = 0; i <= plain.length; i++) {
+        const lag = i + j * s;
+        if (lag > 0) by[lag] = scale * lagDot(this.adjoint, x, pad, n, lag);
+      }
+    }
+  }
+
+  /** The part of the start: ½·scale·c′Cc − ½ ln |V| differenced with respect to every coefficient. */
+  private addStart(factors: Factors, c: Float64Array, scale: number, gradient: Float64Array): void {
+    const n = this.engine.observed;
+    const here = startHeight(this.engine.start, c, scale);
+    let at = 0;
+    for (const name of ['ar', 'ma', 'seasonalAr', 'seasonalMa'] as const) {
+      const own = Float64Array.from(factors[name]);
+      const step = factorStep(own, name === 'ma' || name === 'seasonalMa', n);
+      for (let i = 0; i < own.length; i++, at++) {
+        const centre = own[i]!;
+        const value = (shift: number): number | null => {
+          own[i] = centre + shift;
+          const { ar, ma } = expandPolynomials({ ...factors, [name]: own }, this.order.s);
+          return this.near.prepare(ar, ma, sparsePolynomial(ma)) ? startHeight(this.near, c, scale) : null;
+        };
+        const above = value(step);
+        const below = value(-step);
+        own[i] = centre;
+        const sides = (above === null ? 0 : 1) + (below === null ? 0 : 1);
+        if (sides > 0) gradient[at]! += ((above ?? here) - (below ?? here)) / (step * sides);
+      }
+    }
+  }
+}
+
+function startHeight({ covariance, m, logDeterminant }: StartEffect, c: Float64Array, scale: number): number {
+  let form = 0;
+  for (let i = 0; i < m; i++) {
+    let row = 0;
+    for (let k = 0; k < m; k++) row += covariance[i * m + k]! * c[k]!;
+    form += c[i]! * row;
+  }
+  return 0.5 * (scale * form - logDeterminant);
+}
+
+/** Σ c_t x_{t−lag}; what lies before the start is zero. */
+function lagDot(c: Float64Array, x: Float64Array, pad: number, n: number, lag: number): number {
+  let even = 0;
+  let odd = 0;
+  let t = pad + lag;
+  const end = pad + n;
+  for (; t + 1 < end; t += 2) {
+    even += c[t]! * x[t - lag]!;
+    odd += c[t + 1]! * x[t + 1 - lag]!;
+  }
+  if (t < end) even += c[t]! * x[t - lag]!;
+  return even + odd;
+}
+
+/** Derivatives by the plain factor from those by multiplied-out lag. */
+function chain(
+  seasonal: ArrayLike<number>,
+  count: number,
+  s: number,
+  sign: 1 | -1,
+  by: Float64Array,
+  gradient: Float64Array,
+  at: number,
+): void {
+  for (let i = 1; i <= count; i++) {
+    let sum = by[i]!;
+    for (let j = 1; j <= seasonal.length; j++) sum += sign * seasonal[j - 1]! * by[i + j * s]!;
+    gradient[at + i - 1] = sum;
+  }
+}
+
+/** The same by the seasonal factor. */
+function chainSeasonal(
+  plain: ArrayLike<number>,
+  count: number,
+  s: number,
+  sign: 1 | -1,
+  by: Float64Array,
+  gradient: Float64Array,
+  at: number,
+): void {
+  for (let j = 1; j <= count; j++) {
+    let sum = by[j * s]!;
+    for (let i = 1; i <= plain.length; i++) sum += sign * plain[i - 1]! * by[i + j * s]!;
+    gradient[at + j - 1] = sum;
+  }
+}

@@ -1,0 +1,192 @@
+import type { Factors } from '../model/expandPolynomials.ts';
+import { expandPolynomials } from '../model/expandPolynomials.ts';
+import type { Parameters } from '../contract/candidate.ts';
+import type { Result } from '../contract/result.ts';
+import { differenceRecord } from '../series/differenceRecord.ts';
+import { conditionalLikelihood, type Conditional } from './engine/conditionalLikelihood.ts';
+import type { Engine } from './engine/engine.ts';
+import { FastEngine } from './engine/fastEngine.ts';
+import { FastGradient } from './engine/fastGradient.ts';
+import { GapFilter } from './engine/gapFilter.ts';
+import { numericGradient } from './engine/numericGradient.ts';
+import { ProfileGls } from './engine/profileGls.ts';
+import { prepareRecord, type PreparedRecord, type PrepareRequest } from './prepareRecord.ts';
+
+/** ln L with level, regression and σ² profiled out, and their values there, in the record's own units. */
+export interface Concentrated {
+  readonly logLikelihood: number;
+  /** Mean or drift first, then the regression coefficients. */
+  readonly beta: Float64Array;
+  readonly innovationVariance: number;
+  /** X′V⁻¹X/σ², row-major: the information on `beta` for known coefficients. */
+  readonly betaInformation: Float64Array;
+}
+
+/** A record and candidate made ready: everything that does not depend on the coefficients is done. */
+export interface PreparedLikelihood {
+  readonly readingsUsed: number;
+  readonly engine: Engine['kind'];
+  readonly columnNames: readonly string[];
+  readonly scale: number;
+  readonly centre: number;
+  readonly logJacobian: number;
+  readonly prepared: PreparedRecord;
+  /** −Infinity outside the stationary region. */
+  readonly concentrated: (factors: Factors) => Concentrated;
+  /** ln L; writes its gradient by φ, θ, Φ, Θ in this order. */
+  readonly concentratedWithGradient: (factors: Factors, gradient: Float64Array) => number;
+  /** Conditional sum of squares and what it implies; only without gaps. */
+  readonly conditional: (factors: Factors) => Conditional;
+  /** Exact ln L at fixed parameters, nothing profiled. */
+  readonly atParameters: (at: Parameters) => number;
+}
+
+/**
+ * Prepares the exact Gaussian likelihood of a record under a candidate's order, level and regressors.
+ *
+ * ln L is that of the record with a flat prior on its d + sD starting values, all constants kept, in the units of the
+ * readings (the transform's Jacobian summed over the readings used). The engine is chosen by the record: without gaps the fast one,
+ * with gaps the filter, with gaps and differencing the filter with a diffuse start; where rounding would eat the fast one's
+ * answer the filter takes over.
+ *
+ * @param request values (gaps as NaN), a checked candidate, window, covariates by name, λ
+ * @returns see PreparedLikelihood; failures as `prepareRecord`
+ */
+export function prepareLikelihood(request: PrepareRequest): Result<PreparedLikelihood> {
+  const made = prepareRecord(request);
+  if (!made.ok) return made;
+  const prepared = made.value;
+  const { order } = request.candidate;
+  const { s } = order;
+  const p = order.p + s * order.P;
+  const q = order.q + s * order.Q;
+  const { record, columns, differencing, scale, readingsUsed } = prepared;
+  const differenced = [record, ...columns].map((one) =>
+    differencing.length > 1 ? differenceRecord(one, differencing) : one,
+  );
+  const fast = prepared.gaps === 0 ? new FastEngine(differenced, p, q) : null;
+  const fastGls = fast && new ProfileGls(fast.count, 0);
+  let filter: GapFilter | null = null;
+  let filterGls: ProfileGls | null = null;
+  const slow = (): [GapFilter, ProfileGls] => {
+    filter ??= fast
+      ? new GapFilter(differenced, p, q, Float64Array.of(1))
+      : new GapFilter([record, ...columns], p, q, differencing);
+    filterGls ??= new ProfileGls(filter.count, filter.flat);
+    return [filter, filterGls];
+  };
+  const constant = readingsUsed * Math.log(scale) - prepared.logJacobian;
+  let current: Engine;
+
+  /** Evaluates and profiles; null outside the region. */
+  const evaluate = (ar: Float64Array, ma: Float64Array): ProfileGls | null => {
+    if (fast !== null && fastGls !== null && fast.evaluate(ar, ma) && fastGls.solve(fast.cross)) {
+      current = fast;
+      return fastGls;
+    }
+    const [engine, gls] = slow();
+    current = engine;
+    return engine.evaluate(ar, ma) && gls.solve(engine.cross) ? gls : null;
+  };
+  const height = (gls: ProfileGls | null): number => {
+    if (gls === null) return -Infinity;
+    const { rss, flatLogDeterminant } = gls.profile;
+    const spread = Math.log((2 * Math.PI * rss) / readingsUsed) + 1;
+    return -0.5 * (readingsUsed * spread + current.logDeterminant + flatLogDeterminant) - constant;
+  };
+  const at = (factors: Factors): ProfileGls | null => {
+    const { ar, ma } = expandPolynomials(factors, s);
+    return evaluate(ar, ma);
+  };
+  const gradientOf = fast && new FastGradient(fast, order, readingsUsed);
+
+  const value: PreparedLikelihood = {
+    readingsUsed,
+    engine: fast ? 'fast' : slow()[0].kind,
+    columnNames: prepared.columnNames,
+    scale,
+    centre: prepared.centre,
+    logJacobian: prepared.logJacobian,
+    prepared,
+    concentrated: (factors) => {
+      const gls = at(factors);
+      return describe(prepared, gls, height(gls));
+    },
+    concentratedWithGradient: (factors, gradient) => {
+      const gls = at(factors);
+      const value = height(gls);
+      if (gls === null) gradient.fill(0);
+      else if (gradientOf !== null && current === fast) gradientOf.write(factors, gls.profile, gradient);
+      else numericGradient(factors, (near) => height(at(near)), value, readingsUsed, gradient);
+      return value;
+    },
+    conditional: (factors) => conditionalLikelihood(prepared, differenced, expandPolynomials(factors, s)),
+    atParameters: (parameters) => {
+      const { ar, ma } = expandPolynomials(parameters, s);
+      const gls = evaluate(ar, ma);
+      if (gls === null) return -Infinity;
+      const rss = fixedSumOfSquares(gls, scaledBeta(prepared, parameters));
+      const variance = parameters.innovationVariance / scale ** 2;
+      const { flatLogDeterminant } = gls.profile;
+      const spread = readingsUsed * Math.log(2 * Math.PI * variance) + rss / variance;
+      return -0.5 * (spread + current.logDeterminant + flatLogDeterminant) - constant;
+    },
+  };
+  return { ok: true, value };
+}
+
+/** Level and regression coefficients on the scaled columns. */
+function scaledBeta(prepared: PreparedRecord, at: Parameters): Float64Array {
+  const level = prepared.columnNames[0];
+  const hasLevel = level === 'mean' || level === 'drift';
+  const own = hasLevel ? [at.mean, ...at.regression] : [...at.regression];
+  const { columnCentres, columnScales, scale, centre } = prepared;
+  let shift = 0;
+  for (let i = hasLevel ? 1 : 0; i < own.length; i++) shift += own[i]! * columnCentres[i]!;
+  if (level === 'mean') own[0] = own[0]! - centre + shift;
+  return Float64Array.from(own, (beta, i) => (beta * columnScales[i]!) / scale);
+}
+
+/** Σ over the GLS sum of squares and the distance of `beta` from its optimum: no cancellation near the optimum. */
+function fixedSumOfSquares(gls: ProfileGls, beta: Float64Array): number {
+  const { profile } = gls;
+  const k = beta.length;
+  let sum = profile.rss;
+  for (let i = 0; i < k; i++)
+    for (let j = 0; j < k; j++)
+      sum += (beta[i]! - profile.beta[i]!) * profile.information[i * k + j]! * (beta[j]! - profile.beta[j]!);
+  return sum;
+}
+
+function describe(prepared: PreparedRecord, gls: ProfileGls | null, logLikelihood: number): Concentrated {
+  const k = prepared.columns.length;
+  if (gls === null)
+    return {
+      logLikelihood,
+      beta: new Float64Array(k),
+      innovationVariance: NaN,
+      betaInformation: new Float64Array(k * k),
+    };
+  const { columnCentres, columnScales, scale, centre, readingsUsed, columnNames } = prepared;
+  const { rss, beta, information } = gls.profile;
+  const own = beta.map((value, i) => (value * scale) / columnScales[i]!);
+  if (columnNames[0] === 'mean') {
+    own[0]! += centre;
+    for (let i = 1; i < k; i++) own[0]! -= own[i]! * columnCentres[i]!;
+  }
+  const variance = rss / readingsUsed;
+  // In the readings' units; a centred column shifts the mean, so the information on the mean's row is carried over.
+  const betaInformation = new Float64Array(k * k);
+  for (let i = 0; i < k; i++)
+    for (let j = 0; j < k; j++)
+      betaInformation[i * k + j] =
+        (information[i * k + j]! * columnScales[i]! * columnScales[j]!) / (variance * scale * scale);
+  if (columnNames[0] === 'mean') uncentre(betaInformation, columnCentres, k);
+  return { logLikelihood, beta: own, innovationVariance: variance * scale * scale, betaInformation };
+}
+
+/** Information on (mean, β) from that on (mean + Σ β c, β): A′IA with A the identity and c in the first row. */
+function uncentre(information: Float64Array, centres: readonly number[], k: number): void {
+  for (let i = 1; i < k; i++) for (let j = 0; j < k; j++) information[i * k + j]! += centres[i]! * information[j]!;
+  for (let j = 1; j < k; j++) for (let i = 0; i < k; i++) information[i * k + j]! += centres[j]! * information[i * k]!;
+}
