@@ -26,13 +26,7 @@ interface Case {
 
 type Gaps = 'none' | 'scattered' | 'run' | 'ends';
 
-function makeCase(
-  seed: number,
-  order: Order,
-  n: number,
-  gaps: Gaps,
-  edge: 'plain' | 'nearAr' | 'nearMa' | 'onMa',
-): Case {
+function makeCase(seed: number, order: Order, n: number, gaps: Gaps): Case {
   const draw = generator(seed);
   const normal = () => Math.sqrt(-2 * Math.log(draw())) * Math.cos(2 * Math.PI * draw());
   const factor = (count: number, sign: 1 | -1) => {
