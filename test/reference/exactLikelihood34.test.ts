@@ -1,5 +1,4 @@
 import { describe, expect, test } from 'vitest';
-import type { Order, Parameters } from '../../workers/contract/candidate.ts';
 import { exactLogLikelihood } from '../../workers/estimation/exactLikelihood.ts';
 import { candidateOf } from '../../workers/model/candidateOf.ts';
 import cases from './exactLikelihood34.json' with { type: 'json' };

@@ -10,6 +10,7 @@ import { FastGradient } from './engine/fastGradient.ts';
 import { GapFilter } from './engine/gapFilter.ts';
 import { numericGradient } from './engine/numericGradient.ts';
 import { ProfileGls } from './engine/profileGls.ts';
+import { scaledBeta } from './scaledBeta.ts';
 import { prepareRecord, type PreparedRecord, type PrepareRequest } from './prepareRecord.ts';
 
 /** ln L with level, regression and σ² profiled out, and their values there, in the record's own units. */
@@ -133,18 +134,6 @@ export function prepareLikelihood(request: PrepareRequest): Result<PreparedLikel
     },
   };
   return { ok: true, value };
-}
-
-/** Level and regression coefficients on the scaled columns. */
-function scaledBeta(prepared: PreparedRecord, at: Parameters): Float64Array {
-  const level = prepared.columnNames[0];
-  const hasLevel = level === 'mean' || level === 'drift';
-  const own = hasLevel ? [at.mean, ...at.regression] : [...at.regression];
-  const { columnCentres, columnScales, scale, centre } = prepared;
-  let shift = 0;
-  for (let i = hasLevel ? 1 : 0; i < own.length; i++) shift += own[i]! * columnCentres[i]!;
-  if (level === 'mean') own[0] = own[0]! - centre + shift;
-  return Float64Array.from(own, (beta, i) => (beta * columnScales[i]!) / scale);
 }
 
 /** Σ over the GLS sum of squares and the distance of `beta` from its optimum: no cancellation near the optimum. */

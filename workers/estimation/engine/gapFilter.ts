@@ -41,14 +41,15 @@ export class GapFilter implements Engine {
    * @param series the record (gaps as NaN) and its columns (no gaps), not differenced, all of length n
    * @param p degree of the multiplied-out AR polynomial; @param q of the MA polynomial
    * @param differencing c_0…c_m₀ of the differencing polynomial
-   * @param sink called with each observed index, its innovations over all series and their variance for unit σ²
+   * @param sink called at every step with its index, the errors of all series (in a gap those of a reading of zero), their
+   *   variance for unit σ², and whether the reading was seen
    */
   constructor(
     private readonly series: readonly Float64Array[],
     p: number,
     q: number,
     private readonly differencing: Float64Array,
-    private readonly sink: ((t: number, errors: Float64Array, variance: number) => void) | null = null,
+    private readonly sink: ((t: number, errors: Float64Array, variance: number, seen: boolean) => void) | null = null,
   ) {
     const record = series[0]!;
     this.present = Uint8Array.from(record, (value) => (Number.isNaN(value) ? 0 : 1));
@@ -89,13 +90,13 @@ export class GapFilter implements Engine {
     for (let t = 0; t < this.present.length; t++) {
       const seen = this.present[t] === 1;
       const variance = settled ? 1 : this.predictVariance();
-      this.predictErrors(t);
+      this.predictErrors(t, seen);
       if (seen) {
         this.logDeterminant += Math.log(variance);
         for (let i = 0; i < count; i++)
           for (let j = 0; j <= i; j++) this.cross[i * count + j]! += (this.errors[i]! * this.errors[j]!) / variance;
-        this.sink?.(t, this.errors, variance);
       }
+      this.sink?.(t, this.errors, variance, seen);
       this.stepStates(ar, t, seen, settled ? null : variance);
       if (settled && seen) continue;
       if (seen) this.stepSeen(ma, variance);
@@ -120,13 +121,13 @@ export class GapFilter implements Engine {
     return 1 + Math.max(sum, 0);
   }
 
-  private predictErrors(t: number): void {
+  private predictErrors(t: number, seen: boolean): void {
     const { state, r, m, flat, count, errors, known, differencing, series } = this;
     for (let i = 0; i < count; i++) {
       let forecast = state[i * r]!;
       for (const k of known) forecast -= differencing[k]! * state[i * r + m + k - 1]!;
       const source = i === 0 ? series[0]! : i > flat ? series[i - flat]! : null;
-      errors[i] = (source === null ? 0 : source[t]!) - forecast;
+      errors[i] = (source === null || (i === 0 && !seen) ? 0 : source[t]!) - forecast;
     }
   }
 
