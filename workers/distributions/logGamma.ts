@@ -21,5 +21,5 @@ export function logGamma(x: number): number {
   const square = inverse * inverse;
   let series = 0;
   for (let k = STIRLING.length - 1; k >= 0; k--) series = series * square + STIRLING[k]!;
-  return (z - 0.5) * Math.log(z) - z + 0.9189385332046727418 + series * inverse - Math.log(shift);
+  return (z - 0.5) * Math.log(z) - z + 0.9189385332046728 + series * inverse - Math.log(shift);
 }
