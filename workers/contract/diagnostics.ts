@@ -1,4 +1,5 @@
 import type { Fit } from './fit.ts';
+import type { Comparability } from './selection.ts';
 
 /**
  * Innovations of a fit. Arrays are as long as the record; NaN where there is none (a gap, a reading outside the window,
@@ -67,7 +68,14 @@ export interface Evidence {
 export type VerdictReason =
   'notWhite' | 'white' | 'warning' | 'largeInnovations' | 'needlessCoefficient' | 'fewReadings' | 'noWaldNumbers';
 
-/** One sentence of the verdict as data, most important first. `panel` is the panel it rests on. */
+/**
+ * One sentence of the verdict as data, most important first. `panel` is the panel it rests on; `about` names coefficients, and
+ * for `warning` the warning's code first. Numbers by reason:
+ * `notWhite`, `white`: p (joint over `lags` lags), lag, statistic, degreesOfFreedom, pAtLag: the lag that speaks loudest;
+ * `largeInnovations`: count, largest (signed), index, limit, p; `needlessCoefficient`: estimate, standardError, p;
+ * `fewReadings`: readings, and wanted and parameters where the number of parameters is the reason;
+ * `warning`, `noWaldNumbers`: those of the warning.
+ */
 export interface VerdictItem {
   readonly reason: VerdictReason;
   readonly weight: 'unsound' | 'doubtful' | 'supports';
@@ -85,6 +93,8 @@ export interface Verdict {
 export interface Judgement {
   readonly evidence: Evidence;
   readonly verdict: Verdict;
+  /** Which fits this one may be compared with by criteria. */
+  readonly comparability: Comparability;
 }
 
 export interface DiagnoseRequest {
@@ -94,4 +104,6 @@ export interface DiagnoseRequest {
   readonly coverage: number;
   /** Largest lag; chosen from the number of readings and the season when left out. */
   readonly lags?: number;
+  /** Law of the portmanteau p-values; `chiSquare` when left out. */
+  readonly portmanteauLaw?: 'chiSquare' | 'weighted';
 }

@@ -20,6 +20,8 @@ export interface PredictRequest {
   readonly values: Float64Array;
   readonly horizon: number;
   readonly coverage: number;
-  /** Covariates continued over the horizon: each `values.length + horizon` long. */
+  /** Index of the first reading predicted, from 1 to `values.length`, which it is when left out. Later readings are not used. */
+  readonly origin?: number;
+  /** Covariates continued over the horizon: each `origin + horizon` long (less its lag, at least). */
   readonly columns?: Readonly<Record<string, Float64Array>>;
 }

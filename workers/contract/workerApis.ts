@@ -4,6 +4,7 @@ import type { Fit } from './fit.ts';
 import type { Prediction, PredictRequest } from './prediction.ts';
 import type { ReadAnswer, ReadRequest } from './reading.ts';
 import type { Result } from './result.ts';
+import type { ComparisonGroup } from './selection.ts';
 
 /** Every worker answers `ready` once its code has loaded. */
 interface Readiness {
@@ -15,6 +16,8 @@ export interface ModellingApi extends Readiness {
   fit(request: FitRequest): Result<Fit>;
   diagnose(request: DiagnoseRequest): Result<Judgement>;
   predict(request: PredictRequest): Result<Prediction>;
+  /** Which of these fits may be compared by criteria, with differences and weights within each group. */
+  compare(fits: readonly Fit[]): Result<readonly ComparisonGroup[]>;
 }
 
 /** `workers/entry/reading.worker.ts`: a file's text to a record. `progress` is a Comlink proxy, called with 0…1. */

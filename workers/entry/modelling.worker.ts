@@ -1,0 +1,4 @@
+import { expose } from 'comlink';
+import { modellingApi } from './modellingApi.ts';
+
+expose(modellingApi);

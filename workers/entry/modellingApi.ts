@@ -1,0 +1,38 @@
+import { transfer } from 'comlink';
+import type { Failure } from '../contract/failures.ts';
+import type { Result } from '../contract/result.ts';
+import type { ModellingApi } from '../contract/workerApis.ts';
+import { fitCandidate } from '../estimation/fitCandidate.ts';
+import { predictRecord } from '../prediction/predictRecord.ts';
+import { comparisonGroups } from '../selection/comparisonGroups.ts';
+import { judgeFit } from '../verdict/judgeFit.ts';
+import { infinityIn } from './infinityIn.ts';
+import { ownBuffers } from './ownBuffers.ts';
+
+/** What the modelling worker answers to: each request refused at the door where it holds an infinity, no call ever throws. */
+export const modellingApi: ModellingApi = {
+  ready: () => true,
+  fit: (request) => guarded(request, fitCandidate),
+  diagnose: (request) => guarded(request, judgeFit),
+  predict: (request) => guarded(request, predictRecord),
+  compare: (fits) => guarded({}, () => ({ ok: true, value: comparisonGroups(fits) })),
+};
+
+interface Readings {
+  readonly values?: Float64Array;
+  readonly columns?: Readonly<Record<string, Float64Array>>;
+}
+
+function guarded<Request extends Readings, Answer>(
+  request: Request,
+  call: (request: Request) => Result<Answer>,
+): Result<Answer> {
+  try {
+    const failure: Failure | null = infinityIn(request);
+    const answer = failure === null ? call(request) : { ok: false as const, failure };
+    return transfer(answer, ownBuffers(answer));
+  } catch (cause) {
+    const message = cause instanceof Error ? cause.message : String(cause);
+    return { ok: false, failure: { code: 'internal', message } };
+  }
+}
