@@ -46,7 +46,13 @@ export function fitSearched(job: Job): Result<Fit> {
       : { ok: false, failure: { code: 'deterministic', spread: noise, resolution } };
   }
 
-  const terrain: Terrain = { space, likelihood: surface.gradientAt, readings, season: candidate.order.s };
+  const terrain: Terrain = {
+    space,
+    likelihood: surface.gradientAt,
+    height: (coefficients) => surface.implied(coefficients).height,
+    readings,
+    season: candidate.order.s,
+  };
   const centred = adjustedRecord(likelihood.prepared, memoryless.beta);
   const found = searchMaxima(terrain, candidate, centred, request);
   const best = found.summits.find(({ admissible }) => admissible);

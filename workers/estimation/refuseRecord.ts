@@ -1,5 +1,6 @@
 import type { Candidate, FitRequest } from '../contract/candidate.ts';
 import type { Failure } from '../contract/failures.ts';
+import { coefficientCount } from './prepareRecord.ts';
 
 /** Rounding of a reading, in units of the largest one, that differences of a noiseless record show. */
 const ROUNDING = 2 ** -50;
@@ -35,16 +36,12 @@ export function refuseRecord(request: FitRequest, candidate: Candidate): Failure
     const index = column.findIndex((value) => value === Infinity || value === -Infinity);
     if (index >= 0) return { code: 'notFinite', what: name, index };
   }
-  const coefficients = coefficientCount(candidate);
+  // The level and σ² count too; a harmonic counts once, its second column being found out later.
+  const coefficients =
+    coefficientCount(candidate) + (candidate.level === 'none' ? 0 : 1) + candidate.regressors.length + 1;
   if (observed < 2) return { code: 'tooFewReadings', readings: observed, needed: coefficients + 2, coefficients };
   if (low === high) return { code: 'noVariation', value: low, afterDifferencing: false };
   return noiseless(values.subarray(from, to), largest);
-}
-
-/** Coefficients of the ARMA part and level (regressors counted as given: a harmonic as one), and σ². */
-function coefficientCount({ order, level, regressors, zeroLags }: Candidate): number {
-  const zeros = Object.values(zeroLags).reduce((sum, lags: readonly number[]) => sum + lags.length, 0);
-  return order.p + order.q + order.P + order.Q - zeros + (level === 'none' ? 0 : 1) + regressors.length + 1;
 }
 
 /** A record on a straight line (first differences constant) or a parabola (second differences constant) to rounding. */

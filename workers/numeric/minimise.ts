@@ -12,7 +12,7 @@ export interface MinimiseOptions {
   /** Longest step allowed in any one coordinate. */
   readonly longestStep: number;
   /** Asked after every iteration: true ends the search as `abandoned`. */
-  readonly abandon?: (at: Float64Array, iterations: number) => boolean;
+  readonly abandon?: (at: Float64Array, iterations: number, value: number) => boolean;
 }
 
 export interface Minimum {
@@ -85,7 +85,7 @@ export function minimise(objective: Objective, start: Float64Array, options: Min
     value = found.value;
     updateInverse(inverse, direction, found.step, gradientChange, product);
     fresh = false;
-    if (options.abandon?.(at, iterations) === true) status = 'abandoned';
+    if (options.abandon?.(at, iterations, value) === true) status = 'abandoned';
   }
   return {
     at,

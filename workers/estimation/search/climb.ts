@@ -8,6 +8,8 @@ export type ProfileLikelihood = (coefficients: Coefficients, gradient: Float64Ar
 export interface Terrain {
   readonly space: SearchSpace;
   readonly likelihood: ProfileLikelihood;
+  /** ln L alone, cheaper than with its gradient; not finite outside. */
+  readonly height: (coefficients: Coefficients) => number;
   readonly readings: number;
   /** Season length, or 0. */
   readonly season: number;
@@ -18,7 +20,7 @@ export interface Landing {
   readonly x: Float64Array;
   readonly held: Int8Array;
   readonly logLikelihood: number;
-  /** `abandoned`: the climb ran to the circle with an AR root, where no admissible maximum is. */
+  /** `abandoned`: the climb ran to the circle with an AR root, where no admissible maximum is, or was hopeless. */
   readonly status: Minimum['status'];
   /** Largest component of the gradient with respect to the free search coordinates. */
   readonly gradientNorm: number;
@@ -26,12 +28,16 @@ export interface Landing {
   readonly inverseHessian: Float64Array;
   readonly iterations: number;
   readonly evaluations: number;
+  /** Given up far below the best: no maximum of interest. */
+  readonly hopeless: boolean;
 }
 
 export interface ClimbOptions {
   readonly maximumIterations: number;
   /** Gain in ln L still predicted at which a climb is done. */
   readonly gain: number;
+  /** The highest end so far: a climb that is still far below it after a few iterations is given up. */
+  readonly best?: number;
 }
 
 /** A start this near to the circle could not move: the transform is too flat there. */
@@ -39,6 +45,12 @@ const START_MARGIN = 5e-4;
 /** Iterations after which a climb is given up if it runs along an AR root on the circle; how near that is, times n. */
 const PATIENCE = 20;
 const AR_CIRCLE = 0.02;
+/**
+ * From this iteration on, a climb this far below the best is given up, and ever nearer ones as it goes on: only maxima
+ * within 2 of the best are of interest, and a quasi-Newton climb has most of its gain behind it by then.
+ */
+const EARLY = 6;
+const FAR_BELOW = 60;
 /** A Fisher-transformed partial beyond this is on the circle to ten digits. */
 const FARTHEST = 12;
 
@@ -54,12 +66,16 @@ export function climb(terrain: Terrain, from: Float64Array, held: Int8Array, opt
   const free = freeCoordinates(held);
   const slope = climbSlope(terrain, held);
   const start = Float64Array.from(free, (i) => toSearch(terrain.space, i, from[i]!, START_MARGIN));
+  let hopeless = false;
   const end = minimise(slope.objective, start, {
     inverseHessian: 1 / terrain.readings,
     decrease: options.gain,
     maximumIterations: options.maximumIterations,
     longestStep: 1.5,
-    abandon: (u, iterations) => iterations >= PATIENCE && nearCircle(terrain, free, u),
+    abandon: (u, iterations, value) => {
+      hopeless = iterations >= EARLY && -value < (options.best ?? -Infinity) - FAR_BELOW / (iterations - EARLY + 1);
+      return hopeless || (iterations >= PATIENCE && nearCircle(terrain, free, u));
+    },
   });
   return {
     x: slope.coordinates(end.at),
@@ -70,6 +86,7 @@ export function climb(terrain: Terrain, from: Float64Array, held: Int8Array, opt
     inverseHessian: end.inverseHessian,
     iterations: end.iterations,
     evaluations: end.evaluations,
+    hopeless,
   };
 }
 

@@ -80,7 +80,7 @@ function spread(ranked: readonly Float64Array[], count: number): Float64Array[] 
 /** Keeps the maxima met so far and counts the work. */
 class Survey {
   private readonly terrain: Terrain;
-  private readonly found: { landing: Landing; reached: number }[] = [];
+  private readonly found: { landing: Landing; reached: number; admissible: boolean }[] = [];
   private starts = 0;
   private iterations = 0;
   private evaluations = 0;
@@ -91,18 +91,16 @@ class Survey {
 
   /** Starts inside the space with their ln L, highest first. */
   screen(starts: readonly Float64Array[]): { x: Float64Array; height: number }[] {
-    const { space, likelihood } = this.terrain;
-    const scratch = new Float64Array(space.coefficients.all.length);
+    const height = heightOf(this.terrain);
     this.evaluations += starts.length;
     return starts
-      .map((x) => ({ x, height: space.place(x) ? likelihood(space.coefficients, scratch) : -Infinity }))
+      .map((x) => ({ x, height: height(x) }))
       .filter(({ height }) => Number.isFinite(height))
       .sort((one, other) => other.height - one.height);
   }
 
   climbFrom(x: Float64Array): void {
-    const held = new Int8Array(x.length);
-    this.add(settleOnFace(this.terrain, climb(this.terrain, x, held, OPTIONS), OPTIONS));
+    this.climbWith(x, new Int8Array(x.length));
   }
 
   /** Climbs along one face from the best two ends so far and from the middle; ends that are no maxima are left out. */
@@ -114,19 +112,21 @@ class Survey {
       held[coordinate] = value;
       const start = x.slice();
       start[coordinate] = value;
-      this.add(settleOnFace(this.terrain, climb(this.terrain, start, held, OPTIONS), OPTIONS));
+      this.climbWith(start, held);
     }
   }
 
+  private climbWith(start: Float64Array, held: Int8Array): void {
+    const best = this.found.reduce(
+      (most, { landing, admissible }) => (admissible ? Math.max(most, landing.logLikelihood) : most),
+      -Infinity,
+    );
+    const end = climb(this.terrain, start, held, { ...OPTIONS, best });
+    this.add(end.hopeless ? end : settleOnFace(this.terrain, end, OPTIONS));
+  }
+
   report(): Exploration {
-    const { space, season } = this.terrain;
-    const summits = this.found
-      .map(({ landing, reached }) => {
-        space.place(landing.x);
-        const admissible = landing.status !== 'abandoned' && isAdmissible(space.coefficients, season);
-        return { landing, reached, admissible };
-      })
-      .sort((one, other) => other.landing.logLikelihood - one.landing.logLikelihood);
+    const summits = [...this.found].sort((one, other) => other.landing.logLikelihood - one.landing.logLikelihood);
     return { summits, starts: this.starts, iterations: this.iterations, evaluations: this.evaluations };
   }
 
@@ -134,21 +134,42 @@ class Survey {
     this.starts++;
     this.iterations += landing.iterations;
     this.evaluations += landing.evaluations;
-    if (!Number.isFinite(landing.logLikelihood)) return;
+    if (landing.hopeless || !Number.isFinite(landing.logLikelihood)) return;
     const height = heightOf(this.terrain);
-    const known = this.found.find((other) => samePlace(height, other.landing, landing));
+    // Climbs given up on the way to the circle have no end of their own: they count as one.
+    const lost = landing.status === 'abandoned';
+    const known = this.found.find((other) =>
+      lost ? other.landing.status === 'abandoned' : samePlace(height, other.landing, landing),
+    );
     if (known !== undefined) {
       known.reached++;
       if (landing.logLikelihood > known.landing.logLikelihood) known.landing = landing;
+      known.admissible = this.isAdmissible(known.landing);
       return;
     }
-    if (landing.held.some((value) => value !== 0) && !isMaximumAcross(this.terrain, landing)) return;
-    this.found.push({ landing, reached: 1 });
+    const end = isMaximumAcross(this.terrain, landing) ? landing : this.climbOff(landing);
+    if (end !== null) this.found.push({ landing: end, reached: 1, admissible: this.isAdmissible(end) });
+  }
+
+  private isAdmissible({ status, x }: Landing): boolean {
+    const { space, season } = this.terrain;
+    return status !== 'abandoned' && space.place(x) && isAdmissible(space.coefficients, season);
+  }
+
+  /** From a point on a face that is higher inside: the interior maximum beside it, or null where that is known. */
+  private climbOff(landing: Landing): Landing | null {
+    const free = new Int8Array(landing.x.length);
+    const inside = landing.x.map((x, i) => (landing.held[i] === 0 ? x : 0.98 * x));
+    const end = climb(this.terrain, inside, free, OPTIONS);
+    this.iterations += end.iterations;
+    this.evaluations += end.evaluations;
+    const height = heightOf(this.terrain);
+    const known = this.found.some((other) => samePlace(height, other.landing, end));
+    return known || !(end.logLikelihood >= landing.logLikelihood) ? null : end;
   }
 }
 
 /** ln L at coordinates, −∞ outside. */
-function heightOf({ space, likelihood }: Terrain): (x: Float64Array) => number {
-  const scratch = new Float64Array(space.coefficients.all.length);
-  return (x) => (space.place(x) ? likelihood(space.coefficients, scratch) : -Infinity);
+function heightOf({ space, height }: Terrain): (x: Float64Array) => number {
+  return (x) => (space.place(x) ? height(space.coefficients) : -Infinity);
 }
