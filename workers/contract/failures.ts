@@ -34,6 +34,7 @@ export type Failure =
   | { readonly code: 'searchFailed'; readonly starts: number }
   | { readonly code: 'noAdmissibleMaximum'; readonly logLikelihood: number }
   | { readonly code: 'startingValuesLost'; readonly observed: number; readonly needed: number }
+  | LinkFailure
   | ReadingFailure;
 
 export type BadCandidateReason =
@@ -83,3 +84,11 @@ export type ReadingFailure =
   | { readonly code: 'unclosedQuote'; readonly line: number }
   /** Fields are separated by commas and numbers carry unquoted decimal commas: the columns cannot be told apart. */
   | { readonly code: 'decimalCommaClash'; readonly line: number; readonly text: string };
+
+/** What can be wrong with a session link or file, and with the record given for it. */
+export type LinkFailure =
+  | { readonly code: 'linkForeign' }
+  | { readonly code: 'linkDamaged'; readonly where: string }
+  | { readonly code: 'linkTooLarge'; readonly characters: number; readonly limit: number }
+  | { readonly code: 'linkNewer'; readonly version: number; readonly known: number }
+  | { readonly code: 'recordMismatch'; readonly fileName: string; readonly sameFile: boolean };

@@ -1,0 +1,54 @@
+import * as Comlink from 'comlink';
+import type { FitRequest } from '../../workers/contract/candidate.ts';
+import type { DiagnoseRequest, Judgement } from '../../workers/contract/diagnostics.ts';
+import type { Fit } from '../../workers/contract/fit.ts';
+import type { Prediction, PredictRequest } from '../../workers/contract/prediction.ts';
+import type { ReadAnswer, ReadRequest } from '../../workers/contract/reading.ts';
+import type { Result } from '../../workers/contract/result.ts';
+import type { ModellingApi, ReadingApi } from '../../workers/contract/workerApis.ts';
+import { failureOf, WorkerPool } from './workerPool.ts';
+
+const MOST_WORKERS = 4;
+
+/** The calls the store makes to the core; every answer is a value, expected failures and dead workers alike. */
+export interface CoreClient {
+  fit(key: string, request: FitRequest): Promise<Result<Fit>>;
+  diagnose(key: string, request: DiagnoseRequest): Promise<Result<Judgement>>;
+  predict(key: string, request: PredictRequest): Promise<Result<Prediction>>;
+  read(request: ReadRequest, progress: (fraction: number) => void): Promise<ReadAnswer>;
+  abort(key: string): void;
+  abortAll(): void;
+  pending(): number;
+}
+
+/** Starts nothing until the first call; workers are made one by one as jobs need them. */
+export function createCoreClient(): CoreClient {
+  const size = Math.max(1, Math.min(MOST_WORKERS, (navigator.hardwareConcurrency || 2) - 1));
+  const modelling = new WorkerPool<ModellingApi>(
+    () => new Worker(new URL('../../workers/entry/modelling.worker.ts', import.meta.url), { type: 'module' }),
+    size,
+  );
+  const reading = new WorkerPool<ReadingApi>(
+    () => new Worker(new URL('../../workers/entry/reading.worker.ts', import.meta.url), { type: 'module' }),
+    1,
+  );
+  const safe = <T>(work: Promise<Result<T>>): Promise<Result<T>> =>
+    work.catch((error: unknown) => ({ ok: false, failure: failureOf(error) }));
+  return {
+    fit: (key, request) => safe(modelling.run<Result<Fit>>(key, async (remote) => await remote.fit(request))),
+    diagnose: (key, request) =>
+      safe(modelling.run<Result<Judgement>>(key, async (remote) => await remote.diagnose(request))),
+    predict: (key, request) =>
+      safe(modelling.run<Result<Prediction>>(key, async (remote) => await remote.predict(request))),
+    read: (request, progress) =>
+      reading
+        .run<ReadAnswer>('read', async (remote) => await remote.read(request, Comlink.proxy(progress)))
+        .catch((error: unknown) => ({ sniffed: null, record: null, failure: failureOf(error) })),
+    abort: (key) => modelling.abort(key),
+    abortAll: () => {
+      modelling.abortAll();
+      reading.abortAll();
+    },
+    pending: () => modelling.pending + reading.pending,
+  };
+}
