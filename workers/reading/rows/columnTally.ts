@@ -1,0 +1,58 @@
+import type { CellKind, CellReader } from '../cells/cellReader.ts';
+import { GrowingFloats } from './growable.ts';
+
+/** Distinct texts remembered of a column; with more it is free text. */
+const WORDS_KEPT = 200;
+/** Places of odd cells remembered, to show. */
+const PLACES_KEPT = 8;
+
+/** One column as the rows go by: its numbers, and what else stood in it. */
+export class ColumnTally {
+  readonly values = new GrowingFloats();
+  numbers = 0;
+  gaps = 0;
+  texts = 0;
+  belowLimit = 0;
+  /** Rows and texts of the first cells that were neither numbers nor gaps. */
+  readonly oddRows: number[] = [];
+  readonly oddTexts: string[] = [];
+  readonly limitRows: number[] = [];
+  readonly limitTexts: string[] = [];
+  readonly words = new Map<string, number>();
+  private readonly suffix: string;
+
+  constructor(suffix: string) {
+    this.suffix = suffix;
+  }
+
+  /** Takes a cell of row `row`; undefined: the row is too short to have it. */
+  take(cell: string | undefined, row: number, reader: CellReader): void {
+    const kind: CellKind = cell === undefined ? 'gap' : reader.read(cell, this.suffix);
+    if (kind === 'number') {
+      this.numbers++;
+      this.values.push(reader.value);
+      return;
+    }
+    this.values.push(NaN);
+    if (kind === 'gap') {
+      this.gaps++;
+      return;
+    }
+    const bare = cell!.trim();
+    if (kind === 'belowLimit') {
+      this.belowLimit++;
+      if (this.limitRows.length < PLACES_KEPT) this.limitRows.push(row);
+      if (this.limitTexts.length < PLACES_KEPT && !this.limitTexts.includes(bare)) this.limitTexts.push(bare);
+      return;
+    }
+    this.texts++;
+    if (this.oddRows.length < PLACES_KEPT) this.oddRows.push(row);
+    if (this.oddTexts.length < PLACES_KEPT && !this.oddTexts.includes(bare)) this.oddTexts.push(bare);
+    if (this.words.size <= WORDS_KEPT) this.words.set(bare, (this.words.get(bare) ?? 0) + 1);
+  }
+
+  /** Few distinct texts, such as a status or a tag column has; free text gives none. */
+  fewWords(): readonly string[] {
+    return this.words.size > 0 && this.words.size <= WORDS_KEPT ? [...this.words.keys()] : [];
+  }
+}

@@ -1,0 +1,83 @@
+import type { Dialect, StampForm } from '../../contract/dialect.ts';
+import { parseNumber } from '../cells/parseNumber.ts';
+import type { HeadRow } from './headRows.ts';
+import { sniffStampForm, type FormFound } from './sniffStampForm.ts';
+
+/** Where time stands in a file. `others`: further columns that could be the time. */
+export interface TimeFound {
+  readonly timeColumn: number | null;
+  readonly clockColumn: number | null;
+  readonly stamp: StampForm | null;
+  readonly others: readonly number[];
+  /** Forms that read the stamps as well as `stamp` does. */
+  readonly rivals: readonly StampForm[];
+}
+
+const SAMPLE = 200;
+const counterName =
+  /^(?:t|time|zeit|temps|tiempo|tempo|tijd|elapsed.*|seconds?|secs?|s|min|mins|minutes?|hours?|hrs?|h|days?|n|no\.?|nr\.?|num|number|index|idx|i|sample|reading|obs|observation|row|record|#|id|seq.*|count|cycle|batch|lot|shift|run)?(?:\W.*)?$/iu;
+
+/** Cells of a column as a sample, blanks left out. */
+export function columnCells(body: readonly HeadRow[], column: number): string[] {
+  const cells: string[] = [];
+  for (const row of body) {
+    const cell = row.cells[column]?.trim() ?? '';
+    if (cell !== '') cells.push(cell);
+    if (cells.length >= SAMPLE) break;
+  }
+  return cells;
+}
+
+/** A plain count or elapsed time: strictly ascending, and evenly so unless its name says what it is. */
+function isCounter(cells: readonly string[], name: string, decimal: '.' | ','): boolean {
+  const values = cells.map((cell) => parseNumber(cell, decimal, null));
+  if (values.length < 3 || values.some((value) => Number.isNaN(value))) return false;
+  const differences = values.slice(1).map((value, i) => value - values[i]!);
+  if (!differences.every((difference) => difference > 0)) return false;
+  if (name.trim() !== '' && counterName.test(name.trim())) return true;
+  const step = differences.toSorted((a, b) => a - b)[Math.floor(differences.length / 2)]!;
+  const even = differences.filter((difference) => Math.abs(difference - step) < 1e-6 * step).length;
+  return even >= 0.95 * differences.length;
+}
+
+/**
+ * The time column, the column with the time of day where date and time are apart, and how the stamps are written.
+ *
+ * Method: columns of calendar stamps go first, from the left; then a time of day alone; then epoch counts; then a plain
+ * count. Settings of the person go before all of it, and the rest is detected around them.
+ *
+ * @param body data rows of the head; @param columns their number; @param names headings, as many or fewer
+ * @param decimal decimal mark; @param settings what the person has fixed
+ * @returns the columns and form; `timeColumn` null where the file has no time
+ */
+export function sniffTime(
+  body: readonly HeadRow[],
+  columns: number,
+  names: readonly string[],
+  decimal: '.' | ',',
+  settings: Partial<Dialect>,
+): TimeFound {
+  if (settings.timeColumn === null) return { timeColumn: null, clockColumn: null, stamp: null, others: [], rivals: [] };
+  const cells = Array.from({ length: columns }, (_, j) => columnCells(body, j));
+  const forms = cells.map((column, j) => sniffStampForm(column, names[j] ?? ''));
+  const isDated = (found: FormFound | null) => found !== null && found.date && !found.form.startsWith('epoch');
+  const isClock = (found: FormFound | null) => found !== null && found.clock && !found.date;
+  const dated = forms.flatMap((found, j) => (isDated(found) ? [j] : []));
+  const clocks = forms.flatMap((found, j) => (isClock(found) ? [j] : []));
+  const epochs = forms.flatMap((found, j) => (found !== null && found.form.startsWith('epoch') ? [j] : []));
+  const counters = cells.flatMap((column, j) => (isCounter(column, names[j] ?? '', decimal) ? [j] : []));
+  const several = columns > 1;
+  const time = settings.timeColumn ?? dated[0] ?? clocks[0] ?? (several ? (epochs[0] ?? counters[0]) : undefined);
+  if (time === undefined) return { timeColumn: null, clockColumn: null, stamp: null, others: [], rivals: [] };
+  const found = forms[time] ?? null;
+  let clockColumn = settings.clockColumn ?? null;
+  if (settings.clockColumn === undefined && found !== null && found.date && !found.clock)
+    clockColumn = clocks.find((j) => j === time + 1) ?? clocks.find((j) => j !== time) ?? null;
+  return {
+    timeColumn: time,
+    clockColumn,
+    stamp: settings.stamp ?? found?.form ?? 'number',
+    others: dated.filter((j) => j !== time),
+    rivals: found?.rivals ?? [],
+  };
+}
