@@ -1,4 +1,5 @@
 import type { Parameters } from '../contract/candidate.ts';
+import type { Failure } from '../contract/failures.ts';
 import type { Fit, Maximum, Outcome } from '../contract/fit.ts';
 import type { Result } from '../contract/result.ts';
 import { adjustedRecord } from './adjustedRecord.ts';
@@ -13,6 +14,9 @@ import type { Terrain } from './search/climb.ts';
 import type { Exploration, Summit } from './search/exploreMaxima.ts';
 import { searchMaxima } from './search/searchMaxima.ts';
 import { SearchSpace, type Coefficients } from './search/searchSpace.ts';
+
+/** Rounding that subtracting level and regression can leave, in units of the readings. */
+const ROUNDING = 2 ** -46;
 
 /** The height that is searched, and what it implies for everything that was profiled out. */
 export interface Surface {
@@ -36,15 +40,9 @@ export function fitSearched(job: Job): Result<Fit> {
   if (!exact && gaps > 0) return { ok: false, failure: { code: 'conditionalWithGaps', gaps } };
   const space = new SearchSpace(candidate.order, candidate.zeroLags);
   const surface = exact ? exactSurface(job) : conditionalSurface(job);
-  const memoryless = likelihood.concentrated(space.coefficients);
-  const noise = Math.sqrt(memoryless.innovationVariance);
-  const resolution = 2 ** -50 * Math.max(likelihood.scale, Math.abs(likelihood.centre));
-  if (!(noise > resolution)) {
-    const differenced = candidate.order.d + candidate.order.D > 0;
-    return differenced
-      ? { ok: false, failure: { code: 'noVariation', value: memoryless.beta[0] ?? 0, afterDifferencing: true } }
-      : { ok: false, failure: { code: 'deterministic', spread: noise, resolution } };
-  }
+  const centred = adjustedRecord(likelihood.prepared, likelihood.concentrated(space.coefficients).beta);
+  const noiseless = refuseNoiseless(job, centred);
+  if (noiseless !== null) return { ok: false, failure: noiseless };
 
   const terrain: Terrain = {
     space,
@@ -53,7 +51,6 @@ export function fitSearched(job: Job): Result<Fit> {
     readings,
     season: candidate.order.s,
   };
-  const centred = adjustedRecord(likelihood.prepared, memoryless.beta);
   const found = searchMaxima(terrain, candidate, centred, request);
   const best = found.summits.find(({ admissible }) => admissible);
   if (best === undefined) {
@@ -94,6 +91,18 @@ export function fitSearched(job: Job): Result<Fit> {
       warnings,
     }),
   };
+}
+
+/** Nothing left to model: what level, regression and differencing leave is rounding of the readings. */
+function refuseNoiseless({ likelihood, candidate }: Job, centred: Float64Array): Failure | null {
+  const { scale, centre } = likelihood;
+  let spread = 0;
+  for (const value of centred) if (!Number.isNaN(value)) spread = Math.max(spread, Math.abs(value) * scale);
+  const resolution = ROUNDING * Math.max(scale, Math.abs(centre));
+  if (spread > resolution) return null;
+  return candidate.order.d + candidate.order.D > 0
+    ? { code: 'noVariation', value: 0, afterDifferencing: true }
+    : { code: 'deterministic', spread, resolution };
 }
 
 function exactSurface({ likelihood }: Job): Surface {

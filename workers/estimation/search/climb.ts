@@ -1,4 +1,6 @@
 import { minimise, type Minimum } from '../../numeric/minimise.ts';
+import { isAdmissible } from './admissibility.ts';
+import { scoringInverse } from './scoringInverse.ts';
 import type { Coefficients, SearchSpace } from './searchSpace.ts';
 
 /** ln L with everything but the coefficients profiled out; writes its gradient with respect to all coefficients. */
@@ -38,6 +40,8 @@ export interface ClimbOptions {
   readonly gain: number;
   /** The highest end so far: a climb that is still far below it after a few iterations is given up. */
   readonly best?: number;
+  /** Keeps the climb inside the admissible set, whose edge then stops it. */
+  readonly fenced?: boolean;
 }
 
 /** A start this near to the circle could not move: the transform is too flat there. */
@@ -64,11 +68,11 @@ const FARTHEST = 12;
  */
 export function climb(terrain: Terrain, from: Float64Array, held: Int8Array, options: ClimbOptions): Landing {
   const free = freeCoordinates(held);
-  const slope = climbSlope(terrain, held);
+  const slope = climbSlope(terrain, held, options.fenced === true);
   const start = Float64Array.from(free, (i) => toSearch(terrain.space, i, from[i]!, START_MARGIN));
   let hopeless = false;
   const end = minimise(slope.objective, start, {
-    inverseHessian: 1 / terrain.readings,
+    inverseHessian: firstInverse(terrain, free, slope.coordinates(start)) ?? 1 / terrain.readings,
     decrease: options.gain,
     maximumIterations: options.maximumIterations,
     longestStep: 1.5,
@@ -90,6 +94,12 @@ export function climb(terrain: Terrain, from: Float64Array, held: Int8Array, opt
   };
 }
 
+function firstInverse({ space, readings, season }: Terrain, free: readonly number[], x: Float64Array) {
+  if (!space.place(x)) return null;
+  const slopes = free.map((i) => (space.isPartial(i) ? 1 - x[i]! * x[i]! : 1));
+  return scoringInverse(space, free, slopes, readings, season);
+}
+
 /** Whether an AR partial is so near to ±1 that only a cancelling MA root can have drawn it there. */
 function nearCircle({ space, readings }: Terrain, free: readonly number[], u: Float64Array): boolean {
   return free.some((i, k) => space.isAr(i) && 1 - Math.abs(Math.tanh(u[k]!)) < AR_CIRCLE / readings);
@@ -100,8 +110,8 @@ export function freeCoordinates(held: Int8Array): number[] {
 }
 
 /** −ln L and its gradient over the free search coordinates u, for `minimise`. */
-export function climbSlope(terrain: Terrain, held: Int8Array) {
-  const { space, likelihood } = terrain;
+export function climbSlope(terrain: Terrain, held: Int8Array, fenced = false) {
+  const { space, likelihood, season } = terrain;
   const free = freeCoordinates(held);
   const partial = free.map((i) => space.isPartial(i));
   const x = Float64Array.from(held);
@@ -114,7 +124,7 @@ export function climbSlope(terrain: Terrain, held: Int8Array) {
     objective: (u: Float64Array, gradient: Float64Array): number => {
       for (let k = 0; k < free.length; k++) if (partial[k] === true && Math.abs(u[k]!) > FARTHEST) return Infinity;
       settle(u);
-      if (!space.place(x)) return Infinity;
+      if (!space.place(x) || (fenced && !isAdmissible(space.coefficients, season))) return Infinity;
       const value = likelihood(space.coefficients, byCoefficient);
       if (!Number.isFinite(value)) return Infinity;
       space.pullBack(byCoefficient, byCoordinate);

@@ -19,11 +19,17 @@ export interface Exploration {
   readonly evaluations: number;
 }
 
-const OPTIONS: ClimbOptions = { maximumIterations: 120, gain: 1e-10 };
-/** Screened random starts for each coefficient, and how many of all starts are climbed from. */
+const OPTIONS: ClimbOptions = { maximumIterations: 120, gain: 1e-8 };
+/** Screened random starts for each coefficient, up to so many coefficients: beyond, random starts are hopeless. */
 const RANDOM_PER_COEFFICIENT = 12;
+const MOST_RANDOM = 8;
+/** Starts climbed from: an autoregression has hardly ever a second maximum, mixed models have several. */
+const CLIMBED_PURE = 3;
 const CLIMBED = 6;
 const CLIMBED_PER_COEFFICIENT = 2;
+const CLIMBED_MOST = 22;
+/** Starts climbed from within the admissible set where all else left it. */
+const FENCED = 5;
 
 /**
  * The quick answer: the highest of the given starts is climbed from, and the end put on the unit circle where it ran
@@ -31,9 +37,12 @@ const CLIMBED_PER_COEFFICIENT = 2;
  */
 export function climbFromBest(terrain: Terrain, starts: readonly Float64Array[]): Exploration {
   const survey = new Survey(terrain);
-  const [best] = survey.screen(starts);
-  if (best !== undefined) survey.climbFrom(best.x);
-  return survey.report();
+  const ranked = survey.screen(starts);
+  for (const { x } of ranked.slice(0, 2)) {
+    survey.climbFrom(x);
+    if (survey.hasAdmissible()) break;
+  }
+  return survey.report(ranked.map(({ x }) => x));
 }
 
 /**
@@ -51,20 +60,19 @@ export function exploreMaxima(
 ): Exploration {
   const { space } = terrain;
   const survey = new Survey(terrain);
-  const scattered = Array.from({ length: RANDOM_PER_COEFFICIENT * space.dimension }, () =>
-    Float64Array.from(
-      { length: space.dimension },
-      (_, i) => (space.isPartial(i) ? 1.9 : 0.6) * (random.uniform() - 0.5),
-    ),
+  const k = space.dimension;
+  const mixed = space.faces().length > 0;
+  const scattered = Array.from({ length: mixed ? RANDOM_PER_COEFFICIENT * Math.min(k, MOST_RANDOM) : k }, () =>
+    Float64Array.from({ length: k }, (_, i) => (space.isPartial(i) ? 1.9 : 0.6) * (random.uniform() - 0.5)),
   );
   const ranked = survey.screen([...climbAlways, ...starts, ...scattered]);
   const chosen = spread(
     ranked.map(({ x }) => x),
-    CLIMBED + CLIMBED_PER_COEFFICIENT * space.dimension,
+    mixed ? Math.min(CLIMBED_MOST, CLIMBED + CLIMBED_PER_COEFFICIENT * k) : CLIMBED_PURE,
   );
   for (const x of [...climbAlways, ...chosen]) survey.climbFrom(x);
   for (const face of space.faces()) survey.searchFace(face.coordinate, face.value);
-  return survey.report();
+  return survey.report(chosen);
 }
 
 /** The first `count` of a ranked list, passing over those close to one already chosen. */
@@ -125,7 +133,19 @@ class Survey {
     this.add(end.hopeless ? end : settleOnFace(this.terrain, end, OPTIONS));
   }
 
-  report(): Exploration {
+  hasAdmissible(): boolean {
+    return this.found.some(({ admissible }) => admissible);
+  }
+
+  /**
+   * The maxima met. Where every climb left the admissible set (models with pairs of roots to spare do that), `starts`
+   * are climbed from once more within it, so that there is an answer: the model without the pairs is always there.
+   */
+  report(starts: readonly Float64Array[]): Exploration {
+    for (const x of starts.slice(0, FENCED)) {
+      if (this.hasAdmissible()) break;
+      this.add(climb(this.terrain, x, new Int8Array(x.length), { ...OPTIONS, fenced: true }));
+    }
     const summits = [...this.found].sort((one, other) => other.landing.logLikelihood - one.landing.logLikelihood);
     return { summits, starts: this.starts, iterations: this.iterations, evaluations: this.evaluations };
   }

@@ -7,6 +7,7 @@ const MAXIMUM_STEPS = 4;
 const STEP = 1e-4;
 /** A step that promises less than this part of a unit in ln L moves no digit of an estimate that is printed. */
 const NEGLIGIBLE = 1e-20;
+const LONG = 1e-7;
 
 /**
  * Newton steps from the end of a climb, until rounding: the quasi-Newton method ends where ln L cannot be told from
@@ -27,9 +28,9 @@ export function polish(terrain: Terrain, landing: Landing): Landing {
   const ahead = new Float64Array(k);
   const behind = new Float64Array(k);
   const curvature = new Float64Array(k * k);
+  let stale = true;
   for (let step = 0; step < MAXIMUM_STEPS; step++) {
-    if (step < 2) {
-      // The Hessian of the second step is as good as at the maximum; later steps only remove rounding.
+    if (stale) {
       for (let i = 0; i < k; i++) {
         const at = u.slice();
         at[i] = u[i]! + STEP;
@@ -47,12 +48,15 @@ export function polish(terrain: Terrain, landing: Landing): Landing {
         }
       }
     }
+    stale = false;
     const factor = curvature.slice();
     if (!cholesky(factor, k)) break;
     const move = gradient.slice();
     choleskySolve(factor, k, move);
     const promised = move.reduce((sum, m, i) => sum + m * gradient[i]!, 0) / 2;
     if (!(promised > NEGLIGIBLE)) break;
+    // After a long step the Hessian has moved too; after a short one it is as good as at the maximum.
+    stale = promised > LONG;
     const next = u.map((ui, i) => ui - move[i]!);
     const nextGradient = new Float64Array(k);
     const nextValue = objective(next, nextGradient);
