@@ -48,7 +48,6 @@ export function polish(terrain: Terrain, landing: Landing): Landing {
         }
       }
     }
-    stale = false;
     const factor = curvature.slice();
     if (!cholesky(factor, k)) break;
     const move = gradient.slice();
