@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { independentVariance } from '../../../workers/diagnostics/independentVariance.ts';
+import { independentVariance, type CorrelogramSize } from '../../../workers/diagnostics/independentVariance.ts';
 import { autocorrelation } from '../../../workers/identification/autocorrelation.ts';
 import { createRandom } from '../../../workers/numeric/random.ts';
 
@@ -27,7 +27,7 @@ describe('correlograms with gaps', () => {
     const lags = [1, 2, 7, 15];
     const replicates = 4000;
     const squares = lags.map(() => 0);
-    let size = { length: 60, observed: 0, pairs: new Int32Array(0) };
+    let size: CorrelogramSize = { length: 60, observed: 0, pairs: new Int32Array(0) };
     for (let i = 0; i < replicates; i++) {
       const record = Float64Array.from(present, (seen) => (seen ? random.normal() : NaN));
       const { correlations, pairs, observed } = autocorrelation(record, 15, 'zero');
