@@ -61,7 +61,11 @@ function rowNotes(read: RowsRead, valueColumn: number, openOrder: ThoroughRead['
       read.badStamps.map(({ line }) => line),
       read.badStamps.map(({ cells }) => cells.join(' ')),
     ),
-    noteOf('gapCells', column.gaps - blankTail(read, valueColumn)),
+    noteOf(
+      'gapCells',
+      column.gaps - blankTail(read, valueColumn),
+      lines(column.gapRows.filter((row) => row < read.rows)),
+    ),
     noteOf('textCells', column.texts, lines(column.oddRows), column.oddTexts),
     noteOf('belowLimit', column.belowLimit, lines(column.limitRows), column.limitTexts),
     noteOf('raggedRows', raggedCount, lines(ragged)),

@@ -3,7 +3,7 @@ import { readRows, type RowsRead } from './rows/readRows.ts';
 import { sniffDialect, type Found } from './sniff/sniffDialect.ts';
 import { columnCells } from './sniff/sniffTime.ts';
 import { exchangeDayMonth } from './stamps/exchangeDayMonth.ts';
-import { findGrid } from './grid/findGrid.ts';
+import { distinctTimes, findGrid } from './grid/findGrid.ts';
 
 /** A file read by the dialect that fits all of it. `openOrder`: day and month cannot be told apart by anything in it. */
 export interface ThoroughRead {
@@ -36,14 +36,16 @@ function regularOrder(times: Float64Array): 'own' | 'other' | 'open' {
 function blocksOfTags(read: RowsRead, found: Found): number {
   const { times } = read;
   if (times === null || read.rows < 8) return -1;
-  const distinct = new Set(times).size;
-  if (distinct > 0.75 * read.rows) return -1;
   const { timeColumn, clockColumn } = found.plan.dialect;
-  return read.columns.findIndex((column, j) => {
+  const wordy = read.columns.flatMap((column, j) => {
     const words = column.fewWords().length;
-    if (j === timeColumn || j === clockColumn || column.numbers > 0) return false;
-    return words >= 2 && words * 2 <= read.rows && distinct * words >= 0.8 * read.rows;
+    const apart = j !== timeColumn && j !== clockColumn && column.numbers === 0;
+    return apart && words >= 2 && words * 2 <= read.rows ? [j] : [];
   });
+  if (wordy.length === 0) return -1;
+  const distinct = distinctTimes(times).length;
+  if (distinct > 0.75 * read.rows) return -1;
+  return wordy.find((j) => distinct * read.columns[j]!.fewWords().length >= 0.8 * read.rows) ?? -1;
 }
 
 /**

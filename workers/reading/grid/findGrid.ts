@@ -14,16 +14,21 @@ export interface GridFound {
   readonly stamps: number;
 }
 
-const ascending = (times: Float64Array): boolean => {
-  for (let i = 1; i < times.length; i++) if (times[i]! < times[i - 1]!) return false;
-  return true;
-};
-
 /** Distinct readable stamps in ascending order. */
 export function distinctTimes(times: Float64Array): Float64Array {
-  const finite = times.filter((time) => !Number.isNaN(time));
-  const sorted = ascending(finite) ? finite : finite.sort();
-  return sorted.filter((time, i) => i === 0 || time !== sorted[i - 1]!);
+  let sorted = new Float64Array(times.length);
+  let [count, ascending] = [0, true];
+  for (let i = 0; i < times.length; i++) {
+    const time = times[i]!;
+    if (Number.isNaN(time)) continue;
+    if (count > 0 && time < sorted[count - 1]!) ascending = false;
+    sorted[count++] = time;
+  }
+  sorted = sorted.subarray(0, count);
+  if (!ascending) sorted.sort();
+  let kept = 0;
+  for (let i = 0; i < count; i++) if (i === 0 || sorted[i] !== sorted[i - 1]) sorted[kept++] = sorted[i]!;
+  return sorted.subarray(0, kept);
 }
 
 /** First point of a grid through `phase` that is not after the first stamp by more than half a step. */

@@ -1,3 +1,4 @@
+import { medianDifference } from './medianDifference.ts';
 import { civilFromDays } from '../stamps/civilFromDays.ts';
 import { daysFromCivil } from '../stamps/daysFromCivil.ts';
 
@@ -27,8 +28,7 @@ export function monthOf(seconds: number): number {
  * @returns the step in months; null for a record that is not monthly
  */
 export function findMonths(times: Float64Array): MonthsFound | null {
-  const differences = Float64Array.from({ length: times.length - 1 }, (_, i) => times[i + 1]! - times[i]!);
-  if (differences.toSorted()[Math.floor(differences.length / 2)]! < SHORTEST) return null;
+  if (medianDifference(times) < SHORTEST) return null;
   const months = Array.from(times, monthOf);
   const clock = ((times[0]! % DAY) + DAY) % DAY;
   const days = Array.from(times, (time) => civilFromDays(Math.floor(time / DAY)));

@@ -1,3 +1,5 @@
+import { medianDifference } from './medianDifference.ts';
+
 /** A regular axis that most stamps lie on. `bad`: stamps off it, or sharing a place with another. */
 export interface StepFound {
   readonly step: number;
@@ -133,9 +135,7 @@ function judge(times: Float64Array, step: number, calendar: boolean): StepFound 
  */
 export function findStep(times: Float64Array, calendar: boolean, fixed?: number): StepFound {
   if (fixed !== undefined) return judge(times, fixed, calendar);
-  const differences = new Float64Array(times.length - 1);
-  for (let i = 0; i < differences.length; i++) differences[i] = times[i + 1]! - times[i]!;
-  const median = differences.toSorted()[Math.floor(differences.length / 2)]!;
+  const median = medianDifference(times);
   const candidates = new Set(commonDifferences(times, median));
   for (const start of [median, ...[...candidates].slice(0, 1)]) {
     const slope = regressionStep(times, start);

@@ -13,9 +13,10 @@ export class ColumnTally {
   gaps = 0;
   texts = 0;
   belowLimit = 0;
-  /** Rows and texts of the first cells that were neither numbers nor gaps. */
+  /** Rows and texts of the first cells that were neither numbers nor gaps; rows of the first gaps and limits. */
   readonly oddRows: number[] = [];
   readonly oddTexts: string[] = [];
+  readonly gapRows: number[] = [];
   readonly limitRows: number[] = [];
   readonly limitTexts: string[] = [];
   readonly words = new Map<string, number>();
@@ -36,6 +37,7 @@ export class ColumnTally {
     this.values.push(NaN);
     if (kind === 'gap') {
       this.gaps++;
+      if (this.gapRows.length < PLACES_KEPT) this.gapRows.push(row);
       return;
     }
     const bare = cell!.trim();

@@ -162,13 +162,17 @@ export function readRows(plan: RowPlan, progress?: (fraction: number) => void): 
   const { text, dialect, from, line } = plan;
   const collector = new RowCollector(plan);
   const marks: Mark[] = [];
+  let told = 0;
   let heading = (dialect.header ? 1 : 0) + (dialect.unitsRow ? 1 : 0);
   const end = splitRows(
     { text, delimiter: dialect.delimiter, quote: dialect.quote, from, line },
     {
       piece: (at, lineThere) => {
         marks.push({ row: collector.rows, from: at, line: lineThere });
-        progress?.(at / text.length);
+        if (at - told > text.length / 100) {
+          told = at;
+          progress?.(at / text.length);
+        }
         return true;
       },
       row: (cells, lineThere) => {
