@@ -114,5 +114,5 @@ export const envelopeSchema = v.pipe(
 /** What travels in a link: the session, and the readings of the active record where they are few enough. */
 export const payloadSchema = v.object({
   envelope: envelopeSchema,
-  inline: v.nullable(v.object({ fileName: text(300), text: text(2_000_000) })),
+  inline: v.nullable(v.object({ fileName: text(300), text: text(64_000_000) })),
 });

@@ -1,7 +1,6 @@
 import type { Candidate } from '../../workers/contract/candidate.ts';
 import type { Dialect } from '../../workers/contract/dialect.ts';
 import type { View } from '../../workers/contract/envelope.ts';
-import type { Repair, Span } from '../../workers/contract/series.ts';
 
 /** Everything the page can ask for. Panels call these and nothing else; they never touch `workerClient`. */
 export interface Actions {
@@ -28,10 +27,6 @@ export interface Actions {
   readonly choose: (rowId: string | null) => void;
   /** Asks for a prediction of the chosen candidate. */
   readonly predict: (horizon: number) => void;
-
-  readonly addRepair: (repair: Repair) => void;
-  readonly removeRepair: (repairId: string) => void;
-  readonly setWindow: (window: Span) => void;
 
   readonly changeView: (part: Partial<View>) => void;
   readonly undo: () => void;

@@ -6,6 +6,7 @@ import type { Failure } from '../../workers/contract/failures.ts';
 import type { Fit } from '../../workers/contract/fit.ts';
 import type { Prediction } from '../../workers/contract/prediction.ts';
 import type { ReadAnswer, ReadRecord } from '../../workers/contract/reading.ts';
+import type { ComparisonGroup } from '../../workers/contract/selection.ts';
 import type { Repair, Span } from '../../workers/contract/series.ts';
 
 /** How far a candidate row has come. `grey` is the result it had before the last edit, kept beside the new one. */
@@ -58,6 +59,12 @@ export interface RecordState {
   readonly source: Source;
 }
 
+/** Answer of the core about rows: `rowIds[i]` is the row that a member's `index` i speaks of. */
+export interface Comparison {
+  readonly rowIds: readonly string[];
+  readonly groups: readonly ComparisonGroup[];
+}
+
 /** A message to the person; stays until dismissed. `failure` says what, where and what to do through `format`. */
 export interface Notice {
   readonly id: string;
@@ -75,8 +82,10 @@ export interface AppState {
   readonly notices: readonly Notice[];
   readonly undoDepth: number;
   readonly redoDepth: number;
+  /** Which rows may be compared by criteria, and their differences; of the rows fitted when it was made. */
+  readonly comparison: Comparison;
   /** Prediction for the chosen candidate, or null where none was asked for yet. */
-  readonly prediction: { readonly rowId: string; readonly prediction: Prediction } | null;
+  readonly prediction: { readonly rowId: string; readonly fit: Fit; readonly prediction: Prediction } | null;
   /** True until an autosaved session or the link has been looked at. */
   readonly opening: boolean;
 }

@@ -20,6 +20,7 @@ export const initialState: AppState = {
   notices: [],
   undoDepth: 0,
   redoDepth: 0,
+  comparison: { rowIds: [], groups: [] },
   prediction: null,
   opening: true,
 };

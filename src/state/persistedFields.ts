@@ -15,6 +15,7 @@ export const persistedFields: { readonly [Field in keyof AppState]: Places } = {
   notices: { link: false, browser: false },
   undoDepth: { link: false, browser: false },
   redoDepth: { link: false, browser: false },
+  comparison: { link: false, browser: false },
   prediction: { link: false, browser: false },
   opening: { link: false, browser: false },
 };

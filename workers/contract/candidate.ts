@@ -1,3 +1,4 @@
+import type { Fit } from './fit.ts';
 import type { Span } from './series.ts';
 
 /** Orders in Box and Jenkins' notation (p,d,q)×(P,D,Q)ₛ. s = 0: no season, and then P = D = Q = 0. */
@@ -81,6 +82,8 @@ export interface FitRequest {
   readonly columns?: Readonly<Record<string, Float64Array>>;
   /** Parameters to start from beside the program's own starts, such as those of a smaller or neighbouring candidate. */
   readonly starts?: readonly Parameters[];
+  /** Fits of other candidates on the same record: those nested in this one lend their parameters as starts. */
+  readonly neighbours?: readonly Fit[];
   /** `first`: the quick answer; `thorough`: the wide search that corrects it (the default). */
   readonly effort?: 'first' | 'thorough';
   /** Hash of `values` where the caller knows it; computed otherwise. */

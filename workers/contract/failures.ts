@@ -87,6 +87,7 @@ export type ReadingFailure =
 
 /** What can be wrong with a session link or file, and with the record given for it. */
 export type LinkFailure =
+  | { readonly code: 'exampleMissing'; readonly name: string }
   | { readonly code: 'linkForeign' }
   | { readonly code: 'linkDamaged'; readonly where: string }
   | { readonly code: 'linkTooLarge'; readonly characters: number; readonly limit: number }

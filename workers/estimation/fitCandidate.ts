@@ -6,6 +6,7 @@ import { coefficientNames } from './coefficientNames.ts';
 import { estimateLambda } from './estimateLambda.ts';
 import { fitClosedForm } from './fitClosedForm.ts';
 import { fitSearched } from './fitSearched.ts';
+import { neighbourStarts } from './neighbourStarts.ts';
 import { prepareLikelihood, type PreparedLikelihood } from './prepareLikelihood.ts';
 import { refuseRecord } from './refuseRecord.ts';
 
@@ -30,14 +31,16 @@ export interface Job {
  * `conditional`: the same search over the conditional sum of squares. `yuleWalker`, `burg`, `leastSquares`: closed
  * forms for pure autoregressions. Deterministic for a given seed.
  *
- * @param request the record with gaps as NaN, the candidate, a seed, and optionally window, covariates, further starts
+ * @param given the record with gaps as NaN, the candidate, a seed, and optionally window, covariates, further starts
  *   and effort
  * @returns the fit with how it was found and what to be wary of, or a failure that says what is wrong
  */
-export function fitCandidate(request: FitRequest): Result<Fit> {
-  const checked = checkCandidate(request.candidate, request.values.length);
+export function fitCandidate(given: FitRequest): Result<Fit> {
+  const checked = checkCandidate(given.candidate, given.values.length);
   if (!checked.ok) return checked;
   const candidate = checked.value;
+  const lent = given.neighbours === undefined ? [] : neighbourStarts(candidate, given.neighbours);
+  const request = { ...given, starts: [...(given.starts ?? []), ...lent] };
   const refusal = refuseRecord(request, candidate);
   if (refusal !== null) return { ok: false, failure: refusal };
   const { transform } = candidate;

@@ -1,0 +1,291 @@
+import type { BadCandidateReason, Failure, LinkFailure, ReadingFailure } from '../../workers/contract/failures.ts';
+import { counted, formatNumber } from './numbers.ts';
+
+/** What happened, where, and what to do. `where` may be empty. */
+export interface FailureText {
+  readonly what: string;
+  readonly where: string;
+  readonly todo: string;
+}
+
+const say = (what: string, where: string, todo: string): FailureText => ({ what, where, todo });
+
+const badReasons: Record<BadCandidateReason, string> = {
+  notAWholeNumber: 'must be a whole number',
+  negative: 'may not be negative',
+  tooLarge: 'is larger than a fit can carry',
+  seasonTooShort: 'must be at least 2 readings long',
+  seasonMissing: 'is needed for seasonal orders',
+  meanWithDifferencing: 'differencing takes the mean away: choose drift or none',
+  driftWithoutDifferencing: 'drift needs differencing: choose mean or none',
+  zeroLagOutOfRange: 'holds a lag at zero that the order does not have, or its highest one',
+  parameterLength: 'does not have one value for every coefficient',
+  variance: 'must be above zero',
+  window: 'lies outside the record',
+  nonstationary: 'is not stationary',
+  eventOutside: 'lies outside the record',
+  transform: 'is not a number',
+};
+
+/** The words for every expected failure; a new code does not compile until it has some. */
+export function failureText(failure: Failure): FailureText {
+  switch (failure.code) {
+    case 'internal':
+      return say(
+        'Something went wrong inside the program.',
+        failure.message,
+        'Your work is kept. Try again; if it happens again, save the session as a file and report it.',
+      );
+    case 'cancelled':
+      return say('Cancelled.', '', 'Fit again when you like.');
+    case 'workerDied':
+      return say('A background worker ended unexpectedly.', failure.reason, 'Your work is kept. Fit again.');
+    case 'timeout':
+      return say(
+        `A background worker did not answer within ${failure.seconds} s.`,
+        '',
+        'Reload the page; the session is kept.',
+      );
+    case 'notFinite':
+      return say(
+        'The record holds an infinite value.',
+        `${failure.what}, reading ${failure.index + 1}`,
+        'Make it a gap in the file, or read the cell as a gap word.',
+      );
+    case 'badCandidate':
+      return say(
+        `This candidate cannot be fitted: ${failure.field} ${badReasons[failure.reason]}.`,
+        failure.field,
+        'Change that setting in the row.',
+      );
+    case 'tooFewReadings':
+      return say(
+        `Too few readings: ${failure.readings} for ${counted(failure.coefficients, 'parameter')}; at least ${failure.needed} are needed.`,
+        '',
+        'Choose lower orders, or bring a longer record.',
+      );
+    case 'noVariation':
+      return say(
+        `The ${failure.afterDifferencing ? 'differenced ' : ''}record does not vary: every value is ${formatNumber(failure.value, 6)}.`,
+        '',
+        'There is no noise to model. Check that the right column was taken.',
+      );
+    case 'deterministic':
+      return say(
+        'After differencing nothing but rounding is left: the record is a line, not noise.',
+        `spread ${formatNumber(failure.spread, 3)}, resolution ${formatNumber(failure.resolution, 3)}`,
+        'A totaliser or set value was probably taken. Difference less, or take another column.',
+      );
+    case 'conditionalWithGaps':
+      return say(
+        `The conditional estimator needs a record without gaps; this one has ${failure.gaps}.`,
+        '',
+        'Choose the exact likelihood, which uses the readings there are. Nothing is interpolated.',
+      );
+    case 'estimatorNeedsPureAr':
+      return say(
+        'This estimator is for pure autoregressions.',
+        failure.estimator,
+        'Set q, P and Q to 0, or choose the exact likelihood.',
+      );
+    case 'estimatorNeedsNoGaps':
+      return say(
+        `This estimator needs a record without gaps; this one has ${failure.gaps}.`,
+        failure.estimator,
+        'Choose the exact likelihood.',
+      );
+    case 'transformDomain':
+      return say(
+        `The transform needs readings above zero; ${failure.count} are not.`,
+        `first: reading ${failure.index + 1} = ${formatNumber(failure.value, 5)}`,
+        'Leave the transform out, or shift the readings.',
+      );
+    case 'columnNotEstimable': {
+      const why = {
+        annihilated: 'differencing takes it away entirely',
+        inGap: 'it acts only where there are no readings',
+        collinear: 'it cannot be told from the inputs before it',
+      }[failure.reason];
+      return say(
+        `The input ${failure.column} cannot be estimated: ${why}.`,
+        failure.column,
+        'Take it out of the candidate.',
+      );
+    }
+    case 'columnMissing':
+      return say(
+        `The input column ${failure.column} is not in the record.`,
+        failure.column,
+        'Read the file again with that column, or take the input out.',
+      );
+    case 'columnLength':
+      return say(
+        `The input column ${failure.column} has ${failure.length} values; ${failure.needed} are needed.`,
+        failure.column,
+        'Give its values for the whole stretch.',
+      );
+    case 'columnGap':
+      return say(
+        `The input column ${failure.column} has no value where there is a reading.`,
+        `reading ${failure.index + 1}`,
+        'Fill that value in the file, or take the input out.',
+      );
+    case 'searchFailed':
+      return say(
+        `No maximum of the likelihood was found from ${counted(failure.starts, 'start')}.`,
+        '',
+        'Choose lower orders.',
+      );
+    case 'noAdmissibleMaximum':
+      return say(
+        'The likelihood has its maximum only where an AR and an MA root cancel on the unit circle.',
+        `ln L ${formatNumber(failure.logLikelihood, 6)}`,
+        'Such a fit means nothing. Choose lower orders.',
+      );
+    case 'startingValuesLost':
+      return say(
+        `The gaps leave ${failure.observed} readings to fix ${failure.needed} starting values.`,
+        '',
+        'Difference less, or bring a longer record.',
+      );
+    default:
+      return isLinkFailure(failure) ? linkText(failure) : readingText(failure);
+  }
+}
+
+const linkCodes: readonly string[] = [
+  'exampleMissing',
+  'linkForeign',
+  'linkDamaged',
+  'linkTooLarge',
+  'linkNewer',
+  'recordMismatch',
+] satisfies LinkFailure['code'][];
+
+function isLinkFailure(failure: LinkFailure | ReadingFailure): failure is LinkFailure {
+  return linkCodes.includes(failure.code);
+}
+
+function linkText(failure: LinkFailure): FailureText {
+  switch (failure.code) {
+    case 'exampleMissing':
+      return say('The example could not be loaded.', failure.name, 'Open a record of your own.');
+    case 'linkForeign':
+      return say(
+        'The address does not end in a session link of this program.',
+        'behind the # of the address',
+        'Ask for the link again, or open a record.',
+      );
+    case 'linkDamaged':
+      return say(
+        'The session link is damaged.',
+        failure.where === 'packing' ? 'it was cut or changed on its way' : `at ${failure.where}`,
+        'Mail programs cut long links: ask for the session as a file. The page works as usual.',
+      );
+    case 'linkTooLarge':
+      return say(
+        `The session link is too long (${failure.characters} characters).`,
+        `limit ${failure.limit}`,
+        'Ask for the session as a file.',
+      );
+    case 'linkNewer':
+      return say(
+        `The session link was made by a newer version (format ${failure.version}; this page knows up to ${failure.known}).`,
+        '',
+        'Reload the page to get the newest version.',
+      );
+    case 'recordMismatch':
+      return say(
+        failure.sameFile
+          ? 'This is the file of the session, but read differently: the readings are not the same.'
+          : 'This record is not the one the session was made with.',
+        failure.fileName,
+        'The candidates of the session were fitted to it all the same; their numbers will differ. Undo to go back.',
+      );
+  }
+}
+
+function readingText(failure: ReadingFailure): FailureText {
+  switch (failure.code) {
+    case 'emptyFile':
+      return say('The file is empty.', '', 'Export it again and open it anew. What was open is kept.');
+    case 'binaryFile':
+      return say(
+        `This is not a text file (${failure.kind}).`,
+        '',
+        'Export the record as CSV or text and open that. What was open is kept.',
+      );
+    case 'fileTooLarge':
+      return say(
+        `The file is too large (${formatNumber(failure.bytes / 1e6, 4)} MB).`,
+        `limit ${formatNumber(failure.limit / 1e6, 4)} MB`,
+        'Export a shorter stretch or fewer columns.',
+      );
+    case 'noNumbers':
+      return say(
+        'No column of numbers was found.',
+        `line ${failure.line}, column ${failure.column}: “${failure.example}”`,
+        'Check the delimiter and the decimal mark below, or open another file.',
+      );
+    case 'noSuchColumn':
+      return say(
+        `There is no column ${failure.column}; the file has ${counted(failure.columns, 'column')}.`,
+        '',
+        'Choose another column.',
+      );
+    case 'tooFewRows':
+      return say(
+        `Only ${counted(failure.readings, 'reading')} in this column; at least ${failure.needed} are needed.`,
+        '',
+        'Choose another column, or bring a longer record.',
+      );
+    case 'allGaps':
+      return say(
+        `The column has no readings at all: ${counted(failure.rows, 'row')}, every one a gap.`,
+        failure.column,
+        'Choose another column, or check the decimal mark.',
+      );
+    case 'constantColumn':
+      return say(
+        `Every reading of the column is the same (${formatNumber(failure.value, 6)}): there is no variation to model.`,
+        failure.column,
+        'Choose another column.',
+      );
+    case 'badStamp':
+      return say(
+        `${counted(failure.count, 'time stamp')} cannot be read.`,
+        `line ${failure.line}, column ${failure.column}: “${failure.text}”`,
+        'Choose how the times are written, or another time column, or no time at all.',
+      );
+    case 'ambiguousDates':
+      return say(
+        'The dates can be read day first or month first.',
+        `line ${failure.line}: “${failure.text}”`,
+        'Say which it is.',
+      );
+    case 'noRegularAxis':
+      return say(
+        `No regular interval fits the times: ${failure.offGrid} of ${failure.rows} rows are off a grid of ${formatNumber(failure.interval, 5)} s.`,
+        '',
+        'Choose a grid below (nearest, mean of bin, last value), or no time.',
+      );
+    case 'gridTooLong':
+      return say(
+        `The times span ${failure.places} places of the grid, more than ${failure.limit}.`,
+        `line ${failure.line}`,
+        'One stamp is probably wrong by years; correct it or choose a longer interval.',
+      );
+    case 'decimalCommaClash':
+      return say(
+        'Commas stand both between columns and inside numbers: the columns cannot be told apart.',
+        `line ${failure.line}: “${failure.text}”`,
+        'Export with semicolons or tabs between columns, or with a decimal point.',
+      );
+    case 'unclosedQuote':
+      return say(
+        'A quotation mark is opened and never closed.',
+        `line ${failure.line}`,
+        'Set quoting to none below, or correct the line.',
+      );
+  }
+}

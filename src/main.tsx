@@ -1,0 +1,29 @@
+import { createRoot } from 'react-dom/client';
+import { App } from './App.tsx';
+import { startAutosave, savedSession } from './state/autosave.ts';
+import { createActions } from './state/createActions.ts';
+import { initialState } from './state/initialState.ts';
+import { browserPlatform } from './state/platform.ts';
+import { createStore } from './state/store.ts';
+import { openSession } from './state/openSession.ts';
+import { AppContext } from './state/useApp.ts';
+import { createCoreClient } from './workerClient/clients.ts';
+import './styles/tokens.css';
+import './styles/sheet.css';
+
+const store = createStore(initialState);
+const { actions, links } = createActions(store, createCoreClient(), browserPlatform);
+startAutosave(store);
+
+const root = document.getElementById('root');
+if (root === null) throw new Error('index.html has no element #root');
+createRoot(root).render(
+  <AppContext value={{ store, actions }}>
+    <App />
+  </AppContext>,
+);
+
+void openSession(store, actions, links, savedSession, location.hash);
+addEventListener('hashchange', () => {
+  if (location.hash.length > 1) void links.openHash(location.hash);
+});
