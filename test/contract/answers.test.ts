@@ -3,6 +3,7 @@ import type { Result } from '../../workers/contract/result.ts';
 import { modellingApi } from '../../workers/entry/modellingApi.ts';
 import { ownBuffers } from '../../workers/entry/ownBuffers.ts';
 import { candidateOf } from '../../workers/model/candidateOf.ts';
+import { readRecord } from '../../workers/reading/readRecord.ts';
 import { publishedSeries } from '../helpers/publishedSeries.ts';
 
 const valueOf = <T>(result: Result<T>): T => {
@@ -56,6 +57,18 @@ describe('answers of the modelling worker', () => {
     expect(buffers).not.toContain(values.buffer);
     const copy = structuredClone(answer);
     expect(structuredClone(answer, { transfer: buffers })).toEqual(copy);
+  });
+});
+
+describe('answers of the reading worker', () => {
+  it('a record and a refusal cross', () => {
+    const rows = Array.from({ length: 30 }, (_, t) => `2024-03-01 00:${String(t).padStart(2, '0')};7,${t % 10}`);
+    const read = readRecord({ text: ['time;pH', ...rows].join('\n'), fileName: 'ph.csv', settings: {} });
+    expect(read.record?.series.values.length).toBe(30);
+    crosses(read);
+    const refused = readRecord({ text: '', fileName: 'empty.csv', settings: {} });
+    expect(refused.failure).not.toBeNull();
+    crosses(refused);
   });
 });
 
