@@ -4,7 +4,7 @@ import type { Links } from './links.ts';
 import type { Store } from './store.ts';
 
 /** The record the page opens with when there is neither a link nor an earlier session. */
-export const firstExample = 'tank-ph.csv';
+export const firstExample = 'neutralisation-ph.csv';
 
 /**
  * What the page shows first: the session of the link; else the session of last time; else the first example, fitted. A
