@@ -12,10 +12,20 @@ import { takeRecord, type Taken } from './takeRecord.ts';
 /** Text characters in which a NUL says that this is no text. */
 const LOOKED_AT = 1 << 16;
 
+/** Whether a carriage return stands anywhere but before a line feed. */
+function hasLoneReturn(text: string): boolean {
+  for (let at = text.indexOf('\r'); at >= 0; at = text.indexOf('\r', at)) {
+    while (text.charCodeAt(at) === 13) at++;
+    if (text.charCodeAt(at) !== 10) return true;
+  }
+  return false;
+}
+
 /** Line feeds alone, without byte order mark. Carriage returns before a line feed are left to the row splitter. */
 function plainLines(text: string): string {
   const bare = text.charCodeAt(0) === 0xfeff ? text.slice(1) : text;
-  return /\r(?!\r*\n)/u.test(bare) ? bare.replace(/\r+\n|\r/gu, '\n') : bare;
+  if (!hasLoneReturn(bare)) return bare;
+  return bare.replace(/\r+\n?/gu, (run) => (run.endsWith('\n') ? '\n' : '\n'.repeat(run.length)));
 }
 
 /** A column number from the settings that the file does not have. */

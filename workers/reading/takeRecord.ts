@@ -200,13 +200,16 @@ function badStamp(read: RowsRead, dialect: RowPlan['dialect']): Failure {
   };
 }
 
-/** Rows where a clock without zone was put back by an hour: the stamp falls behind by just that. */
+/**
+ * Rows where a clock without zone was put back by an hour: the stamp falls behind by just that. In hourly records the
+ * stamp merely repeats, which counts only in the first hours of a Sunday, when clocks are changed.
+ */
 function clockTurns(times: Float64Array, placement: Placement, grid: Grid): number[] {
   if (grid.kind !== 'seconds' || grid.step > 3600) return [];
-  return placement.reversed.filter((row) => {
-    const back = times[row - 1]! + grid.step - times[row]!;
-    return Math.abs(back - 3600) < grid.step * 0.5;
-  });
+  const back = (row: number) => times[row - 1]! + grid.step - times[row]!;
+  const anHour = (row: number) => row > 0 && Math.abs(back(row) - 3600) < grid.step * 0.5;
+  const onSunday = (row: number) => (Math.floor(times[row]! / 86400) + 4) % 7 === 0 && times[row]! % 86400 <= 3 * 3600;
+  return [...placement.reversed.filter(anHour), ...placement.duplicates.filter((row) => anHour(row) && onSunday(row))];
 }
 
 /** The other numeric columns, or the other tags, on the same grid. */

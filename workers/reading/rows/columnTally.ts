@@ -3,6 +3,8 @@ import { GrowingFloats } from './growable.ts';
 
 /** Distinct texts remembered of a column; with more it is free text. */
 const WORDS_KEPT = 200;
+/** Letters of a text remembered. */
+const LETTERS_KEPT = 60;
 /** Places of odd cells remembered, to show. */
 const PLACES_KEPT = 8;
 
@@ -40,7 +42,7 @@ export class ColumnTally {
       if (this.gapRows.length < PLACES_KEPT) this.gapRows.push(row);
       return;
     }
-    const bare = cell!.trim();
+    const bare = cell!.trim().slice(0, LETTERS_KEPT);
     if (kind === 'belowLimit') {
       this.belowLimit++;
       if (this.limitRows.length < PLACES_KEPT) this.limitRows.push(row);

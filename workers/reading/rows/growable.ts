@@ -1,7 +1,7 @@
 /** A column of doubles that grows by doubling. */
 export class GrowingFloats {
   length = 0;
-  private room = new Float64Array(256);
+  private room = new Float64Array(16);
 
   push(value: number): void {
     if (this.length === this.room.length) {
@@ -21,7 +21,7 @@ export class GrowingFloats {
 /** A column of 32-bit whole numbers that grows by doubling. */
 export class GrowingInts {
   length = 0;
-  private room = new Int32Array(256);
+  private room = new Int32Array(16);
 
   push(value: number): void {
     if (this.length === this.room.length) {

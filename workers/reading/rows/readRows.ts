@@ -1,6 +1,7 @@
 import type { Dialect, StampForm } from '../../contract/dialect.ts';
 import { CellReader } from '../cells/cellReader.ts';
 import { StampReader, type OrderTally } from '../stamps/stampReader.ts';
+import { isRule } from '../sniff/sniffLayout.ts';
 import { ColumnTally } from './columnTally.ts';
 import { GrowingFloats, GrowingInts } from './growable.ts';
 import { splitRows } from './splitRows.ts';
@@ -178,7 +179,7 @@ export function readRows(plan: RowPlan, progress?: (fraction: number) => void): 
       row: (cells, lineThere) => {
         if (heading > 0) {
           if (!isBlankRow(cells)) heading--;
-        } else collector.take(cells, lineThere);
+        } else if (collector.rows > 0 || !isRule(cells)) collector.take(cells, lineThere);
         return true;
       },
     },

@@ -50,7 +50,7 @@ function score(rows: readonly HeadRow[]): number {
 export function isSplitDecimal(rows: readonly HeadRow[]): boolean {
   const filled = rows.filter(({ cells }) => cells.some((cell) => cell.trim() !== ''));
   const pairs = filled.filter(({ cells }) => cells.length === 2 && digitsOnly.test(cells[1]!));
-  if (pairs.length < 0.8 * filled.length) return false;
+  if (pairs.length === 0 || pairs.length < 0.8 * filled.length) return false;
   const heads = pairs.map(({ cells }) => cells[0]!.trim());
   if (!heads.every((head) => /^[+\u2212-]?\d+$/u.test(head))) return false;
   // A heading of two names, or a first column that only ascends (a counter, epoch seconds), speaks for two columns.

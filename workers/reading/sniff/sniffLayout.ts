@@ -16,6 +16,12 @@ export interface Layout {
   readonly body: readonly HeadRow[];
 }
 
+/** A line drawn under the header (`-----|----`). */
+export const isRule = (cells: readonly string[]): boolean => {
+  const drawn = cells.join('').replace(/\s/gu, '');
+  return drawn.length > 1 && /^[-=_+:|]+$/u.test(drawn);
+};
+
 const blank = ({ cells }: HeadRow): boolean => cells.every((cell) => cell.trim() === '');
 
 /** Column classes that most of the lower half of the head shows. */
@@ -45,7 +51,7 @@ function isData(row: HeadRow, classes: readonly (CellClass | null)[]): boolean {
   return fitting * 2 >= numeric.length && numeric.some((j) => kinds[j] === 'number');
 }
 
-/** Rows directly above the data that may be header and units row, nearest last. */
+/** Rows directly above the data that may be header and units row, nearest last; lines drawn under the header are passed over. */
 function headingRows(rows: readonly HeadRow[], first: number, columns: number): HeadRow[] {
   const above: HeadRow[] = [];
   for (let i = first - 1; i >= 0 && above.length < 2; i--) {
@@ -54,6 +60,7 @@ function headingRows(rows: readonly HeadRow[], first: number, columns: number): 
       if (above.length > 0) break;
       continue;
     }
+    if (isRule(row.cells)) continue;
     const filled = row.cells.filter((cell) => cell.trim() !== '').length;
     if (filled * 2 < columns && !(columns <= 2 && filled > 0)) break;
     above.unshift(row);
@@ -90,7 +97,8 @@ export function sniffLayout(rows: readonly HeadRow[], settings: Partial<Dialect>
   if (first === 0 && filled.length > 1 && classes.every((kind) => kind === 'text' || kind === null)) first = 1;
   const data = filled[first];
   const at = data === undefined ? kept.length : kept.indexOf(data);
-  let above = headingRows(kept, at, columns);
+  const used = classes.filter((kind) => kind !== null).length;
+  let above = headingRows(kept, at, used);
   let unitsRow = above.length === 2 && isUnits(above[1]!, above[0]!);
   if (settings.unitsRow !== undefined) unitsRow = settings.unitsRow && (above.length === 2 || given !== undefined);
   let header = above.length > 0;
@@ -108,7 +116,9 @@ export function sniffLayout(rows: readonly HeadRow[], settings: Partial<Dialect>
   } else above = unitsRow ? above.slice(-2) : above.slice(-1);
   const top = above[0] ?? data;
   const last = above.at(-1);
-  const body = filled.filter(({ line }) => (last === undefined ? line >= (data?.line ?? 1) : line > last.line));
+  const body = filled.filter(
+    ({ line, cells }) => !isRule(cells) && (last === undefined ? line >= (data?.line ?? 1) : line > last.line),
+  );
   return {
     preambleLines: given ?? (top === undefined ? 0 : top.line - 1),
     header,

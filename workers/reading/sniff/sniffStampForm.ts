@@ -12,8 +12,11 @@ export interface FormFound {
   readonly rivals: readonly StampForm[];
 }
 
-/** Share of a column's cells that must read as stamps. */
-const ENOUGH = 0.8;
+/**
+ * Share of a column's cells that must read as stamps. Words and numbers hardly ever do, so that a column with two fifths is
+ * one of stamps with many that are wrong, which is to be said and not passed over.
+ */
+const ENOUGH = 0.4;
 const calendarForms = ['iso', 'yearFirst', 'dayFirst', 'monthFirst'] as const;
 const digitsAndMarks = /^[\d.,]+$/u;
 const allTwoDigits = /^\d{2}([-/.])\d{2}\1\d{2}(?!\d)/u;

@@ -63,13 +63,15 @@ function numeric(text: string, form: StampForm): DateRead | null {
     : none;
 }
 
-function named(text: string): number {
+/** Dates with the month by name; year first only in that form, so that a form says what is written. */
+function named(text: string, form: StampForm): number {
+  const ordered = yearName.exec(text);
+  if (ordered !== null) return daysFromCivil(Number(ordered[1]), monthNumber(ordered[2]!), Number(ordered[3] ?? 1));
+  if (form === 'yearFirst') return NaN;
   let match = dayName.exec(text);
   if (match !== null) return daysFromCivil(fullYear(match[3]!), monthNumber(match[2]!), Number(match[1]));
   match = nameDay.exec(text);
   if (match !== null) return daysFromCivil(fullYear(match[3]!), monthNumber(match[1]!), Number(match[2]));
-  match = yearName.exec(text);
-  if (match !== null) return daysFromCivil(Number(match[1]), monthNumber(match[2]!), Number(match[3] ?? 1));
   match = nameYear.exec(text);
   return match === null ? NaN : daysFromCivil(fullYear(match[2]!), monthNumber(match[1]!), 1);
 }
@@ -114,7 +116,7 @@ export function parseDate(text: string, form: StampForm): DateRead {
   const fixed = settled(text);
   if (!Number.isNaN(fixed)) return { days: fixed };
   if (form === 'iso') return none;
-  const days = named(text);
+  const days = named(text, form);
   if (!Number.isNaN(days)) return { days };
   const bare = text.replace(weekday, '');
   return bare === text ? none : parseDate(bare, form);

@@ -8,6 +8,9 @@ const isoHour = /^(\d{4}-\d{2}-\d{2})[T ](\d{2})(\d{2})?(\d{2})?(Z|[+-]\d{2}:?\d
 const dotted = /^(.*\d.*?)(?:[T ]|-(?=\d{2}\.\d{2}\.\d{2}))\s*(\d{1,2}\.\d{2}(?:\.\d{2}(?:[.,]\d+)?)?)$/u;
 const hourMark = /^(.*?)[T ]*(\d{1,2})\s?[hH]\s?(\d{2})?(?:\s?(?:min|m)?\s?(\d{2})\s?s?)?$/u;
 
+/** No stamp is longer than this. */
+const LONGEST = 64;
+
 const isDigit = (code: number): boolean => code >= 48 && code <= 57;
 const endOfDate = /[T_,;\-–\s]+$/u;
 
@@ -53,6 +56,7 @@ export class StampReader {
   }
 
   private calendar(text: string): number {
+    if (text.length > LONGEST) return NaN;
     const colon = text.indexOf(':');
     if (colon < 1) return this.withoutColon(text);
     let at = colon - 1;
