@@ -68,7 +68,7 @@ test('the whole job: drop, fit, toggle, sort, link, dossier', async ({ page, bro
   await allFitted(page, 3);
 
   // Sorting by mouse and by keyboard.
-  const heading = table(page).getByRole('columnheader', { name: /^AIC\b/ });
+  const heading = table(page).getByRole('columnheader', { name: /^AICc/ });
   await heading.getByRole('button').click();
   await expect(heading).toHaveAttribute('aria-sort', 'ascending');
   await heading.getByRole('button').press('Enter');

@@ -16,6 +16,7 @@ export interface Trace {
   readonly hoverinfo?: 'skip' | 'text';
   readonly hovertemplate?: string;
   readonly text?: readonly string[];
+  readonly textposition?: 'none';
   readonly showlegend?: false;
   readonly connectgaps?: false;
   readonly customdata?: readonly number[];

@@ -4,7 +4,7 @@ import { baseAxis, baseLayout, type Figure, type Palette, type Trace } from './f
 
 /** p-values below this are drawn at the end of the scale; the hover text has the number. */
 const FLOOR = 1e-4;
-const TICKS = [1, 0.1, 0.05, 0.01, 0.001, 1e-4];
+const TICKS = [1, 0.05, 0.01, 0.001, 1e-4];
 
 /**
  * One instrument over the lag: above, the residual autocorrelations with the band they would keep within by chance; below,
@@ -13,24 +13,17 @@ const TICKS = [1, 0.1, 0.05, 0.01, 0.001, 1e-4];
  */
 export function lagFigure({ correlogram, portmanteau }: Evidence, palette: Palette): Figure {
   const lags = Array.from(correlogram.lags);
-  const clear = { color: 'rgba(0,0,0,0)', width: 0 };
-  const steps = lags.flatMap((lag) => [lag - 0.5, lag + 0.5]);
-  const band = (sign: 1 | -1) => lags.flatMap((_, i) => [sign * correlogram.bands[i]!, sign * correlogram.bands[i]!]);
+  // The band as one area: along the upper edges, back along the lower ones. Areas lie under the bars as shapes; traces would cover them.
+  const edge = (i: number, sign: 1 | -1): string[] => {
+    const [left, right] = sign > 0 ? [-0.5, 0.5] : [0.5, -0.5];
+    return [left, right].map((shift) => `${lags[i]! + shift!},${sign * correlogram.bands[i]!}`);
+  };
+  const upper = lags.flatMap((_, i) => edge(i, 1));
+  const lower = lags.flatMap((_, i) => edge(lags.length - 1 - i, -1));
   const outside = lags.map((_, i) => Math.abs(correlogram.correlations[i]!) > correlogram.bands[i]!);
   const shown = Array.from(portmanteau.lags).filter((_, i) => !Number.isNaN(portmanteau.pValues[i]!));
   const p = shown.map((lag) => portmanteau.pValues[Array.from(portmanteau.lags).indexOf(lag)]!);
   const data: Trace[] = [
-    { type: 'scatter', mode: 'lines', x: steps, y: band(-1), line: clear, hoverinfo: 'skip' },
-    {
-      type: 'scatter',
-      mode: 'lines',
-      x: steps,
-      y: band(1),
-      line: clear,
-      fill: 'tonexty',
-      fillcolor: palette.band,
-      hoverinfo: 'skip',
-    },
     {
       type: 'bar',
       x: lags,
@@ -46,6 +39,7 @@ export function lagFigure({ correlogram, portmanteau }: Evidence, palette: Palet
       yaxis: 'y2',
       width: 0.62,
       text: p.map(formatPValue),
+      textposition: 'none',
       marker: { color: p.map((value) => shade(value, palette)), line: { width: 0 } },
       hovertemplate: 'up to lag %{x}: p %{text}<extra></extra>',
     },
@@ -78,6 +72,14 @@ export function lagFigure({ correlogram, portmanteau }: Evidence, palette: Palet
         title: { text: 'p up to lag', standoff: 4 },
       }),
       shapes: [
+        {
+          type: 'path',
+          path: `M${[...upper, ...lower].join('L')}Z`,
+          fillcolor: palette.band,
+          line: { width: 0 },
+          layer: 'below',
+          yref: 'y',
+        },
         {
           type: 'rect',
           xref: 'paper',

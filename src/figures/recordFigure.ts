@@ -51,13 +51,29 @@ export function recordFigure({ series, name, evidence, prediction }: RecordParts
         anchor: withInnovations ? 'y2' : 'y',
         title: axis.zone !== null ? { text: 'time (UTC)' } : { text: '' },
       }),
-      yaxis: baseAxis(palette, { domain: withInnovations ? [0.42, 1] : [0, 1], title: { text: title, standoff: 4 } }),
+      yaxis: baseAxis(palette, { domain: withInnovations ? [0.46, 1] : [0, 1], title: { text: title, standoff: 4 } }),
       yaxis2: baseAxis(palette, {
-        domain: [0, 0.34],
+        domain: [0, 0.38],
         title: { text: 'e/s', standoff: 4 },
         zeroline: true,
         zerolinecolor: palette.hairline,
       }),
+      shapes: withInnovations
+        ? [
+            {
+              type: 'rect',
+              xref: 'paper',
+              x0: 0,
+              x1: 1,
+              yref: 'y2',
+              y0: -2,
+              y1: 2,
+              fillcolor: palette.band,
+              line: { width: 0 },
+              layer: 'below',
+            },
+          ]
+        : [],
       yaxis3: { domain: [0, 1], range: [0, 1], fixedrange: true, visible: false, overlaying: 'y' },
     },
     says:
@@ -92,25 +108,8 @@ function innovationTraces({ innovations }: Evidence, axis: Axis, palette: Palett
   const { index, value } = thinned(standardised);
   const x = index.map((t) => chartTime(axis, t));
   const hovertemplate = '%{y:.2f} s<extra></extra>';
-  const ends = [chartTime(axis, 0), chartTime(axis, standardised.length - 1)];
-  const edge = { color: 'rgba(0,0,0,0)', width: 0 };
-  const band: Trace[] = [
-    { type: 'scatter', mode: 'lines', x: ends, y: [-2, -2], yaxis: 'y2', line: edge, hoverinfo: 'skip' },
-    {
-      type: 'scatter',
-      mode: 'lines',
-      x: ends,
-      y: [2, 2],
-      yaxis: 'y2',
-      line: edge,
-      fill: 'tonexty',
-      fillcolor: palette.band,
-      hoverinfo: 'skip',
-    },
-  ];
   if (standardised.length > MOST_STEMS)
     return [
-      ...band,
       {
         type: 'scatter',
         mode: 'lines',
@@ -123,7 +122,6 @@ function innovationTraces({ innovations }: Evidence, axis: Axis, palette: Palett
     ];
   const width = 0.4 * (chartTime(axis, 1) - chartTime(axis, 0));
   return [
-    ...band,
     { type: 'bar', x, y: value, yaxis: 'y2', width, marker: { color: palette.ink, line: { width: 0 } }, hovertemplate },
   ];
 }

@@ -28,7 +28,7 @@ export function subscript(value: number): string {
 /**
  * A number to so many significant digits, in a person's notation; powers of ten only where the plain form would mislead.
  *
- * @example formatNumber(-0.83756, 4) is "−0.8376"; NaN is "–"
+ * @example formatNumber(-0.83756, 4) is "−0.8376"; a whole number has no decimals; NaN is "–"
  */
 export function formatNumber(value: number | null, digits = 5): string {
   if (value === null || Number.isNaN(value)) return '–';
@@ -36,6 +36,7 @@ export function formatNumber(value: number | null, digits = 5): string {
   if (value === 0) return '0';
   const size = Math.floor(Math.log10(Math.abs(value)));
   if (size < -5 || size > 8) return scientific(value, digits);
+  if (Number.isInteger(value)) return typeset(String(value));
   const decimals = Math.max(0, digits - 1 - size);
   return typeset(value.toFixed(Math.min(decimals, 20)));
 }

@@ -159,6 +159,6 @@ function replaced(state: AppState, arrival: Arrival, record: ReadRecord, example
     ...state,
     records: [next],
     active: id,
-    view: { ...state.view, chosen: kept === null ? 0 : state.view.chosen },
+    view: { ...state.view, chosen: kept === null ? null : state.view.chosen },
   };
 }

@@ -2,7 +2,7 @@ import type { View } from '../../workers/contract/envelope.ts';
 import type { AppState } from './appState.ts';
 
 /** Columns of the candidate table in the order they are shown at first. */
-export const defaultColumns = ['lnL', 'sigma', 'k', 'aic', 'aicc', 'bic', 'delta', 'whiteness'] as const;
+export const defaultColumns = ['k', 'lnL', 'aicc', 'bic', 'delta', 'whiteness'] as const;
 
 export const initialView: View = {
   chosen: null,

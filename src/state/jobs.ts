@@ -103,7 +103,10 @@ export function createJobs(store: Store, client: CoreClient): Jobs {
       rows.flatMap(({ progress }) => (progress.kind === 'fitted' ? [progress.fit] : [])),
     );
     if (answer.ok)
-      store.set((state) => ({ ...state, comparison: { rowIds: rows.map(({ id }) => id), groups: answer.value } }));
+      store.set((state) => {
+        const comparison = { rowIds: rows.map(({ id }) => id), groups: answer.value };
+        return { ...state, comparison, view: withChoice(state, comparison) };
+      });
   };
 
   const fitWaiting = () => {
@@ -144,6 +147,14 @@ export function createJobs(store: Store, client: CoreClient): Jobs {
       }));
     },
   };
+}
+
+/** Until the person chooses, the best row of the largest group is shown, once all are fitted. */
+function withChoice(state: AppState, { rowIds, groups }: AppState['comparison']): AppState['view'] {
+  const all = activeRecord(state)?.rows ?? [];
+  const best = rowIds[groups[0]?.members[0]?.index ?? -1];
+  if (state.view.chosen !== null || best === undefined || rowIds.length < all.length) return state.view;
+  return { ...state.view, chosen: all.findIndex(({ id }) => id === best) };
 }
 
 function fitsOf(record: RecordState): Fit[] {

@@ -41,6 +41,8 @@ export interface RootPoint {
   readonly polynomial: 'ar' | 'ma';
   readonly modulus: number;
   readonly period: number;
+  /** Readings in which its effect falls to 1/e: −1/ln modulus; Infinity on the circle. */
+  readonly timeConstant: number;
 }
 
 /** The difference equation in numbers: coefficients of the multiplied-out polynomials, mean and constant both. */

@@ -38,7 +38,8 @@ function pointsOf(polynomial: 'ar' | 'ma', coefficients: readonly number[], seas
       const turn = (angle + 2 * Math.PI * k) / season;
       const folded = Math.atan2(Math.sin(turn), Math.cos(turn));
       if (folded < -1e-9) continue;
-      points.push({ polynomial, modulus: size, period: folded < 1e-9 ? Infinity : (2 * Math.PI) / folded });
+      const period = folded < 1e-9 ? Infinity : (2 * Math.PI) / folded;
+      points.push({ polynomial, modulus: size, period, timeConstant: size < 1 ? -1 / Math.log(size) : Infinity });
     }
   }
   return points;

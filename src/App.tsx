@@ -1,0 +1,83 @@
+import { useEffect, useState, type DragEvent } from 'react';
+import { ArrivalSheet } from './panels/arrival/ArrivalSheet.tsx';
+import { CandidateTable } from './panels/candidates/CandidateTable.tsx';
+import { DossierBar } from './panels/dossier/DossierBar.tsx';
+import { Detail } from './panels/evidence/Detail.tsx';
+import { Evidence } from './panels/evidence/Evidence.tsx';
+import { Notices } from './panels/notices/Notices.tsx';
+import { PredictStation } from './panels/predict/PredictStation.tsx';
+import { EmptySheet } from './panels/record/EmptySheet.tsx';
+import { Masthead } from './panels/record/Masthead.tsx';
+import { RecordPanel } from './panels/record/RecordPanel.tsx';
+import { activeRecord } from './state/selectors.ts';
+import { useActions, useAppState } from './state/useApp.ts';
+
+/** The page: one sheet that takes a drop anywhere. */
+export function App() {
+  const actions = useActions();
+  const record = useAppState(activeRecord);
+  const arrival = useAppState((state) => state.arrival);
+  const opening = useAppState((state) => state.opening);
+  const [over, setOver] = useState(false);
+
+  useEffect(() => {
+    const onKey = (event: KeyboardEvent) => {
+      const target = event.target as HTMLElement;
+      if (!(event.ctrlKey || event.metaKey) || event.key.toLowerCase() !== 'z' || target.matches('textarea')) return;
+      event.preventDefault();
+      if (event.shiftKey) actions.redo();
+      else actions.undo();
+    };
+    addEventListener('keydown', onKey);
+    return () => removeEventListener('keydown', onKey);
+  }, [actions]);
+
+  const onDrop = (event: DragEvent) => {
+    event.preventDefault();
+    setOver(false);
+    const [file] = event.dataTransfer.files;
+    if (file !== undefined) void actions.openFile(file);
+    else {
+      const text = event.dataTransfer.getData('text/plain');
+      if (text !== '') void actions.openText(text, 'dropped text');
+    }
+  };
+
+  return (
+    <div
+      className={over ? 'page taking' : 'page'}
+      onDragOver={(event) => {
+        event.preventDefault();
+        setOver(true);
+      }}
+      onDragLeave={(event) => {
+        if (event.relatedTarget === null) setOver(false);
+      }}
+      onDrop={onDrop}
+    >
+      <a className="skip" href="#candidates">
+        To the candidates
+      </a>
+      <Masthead />
+      <Notices />
+      {arrival !== null && <ArrivalSheet arrival={arrival} />}
+      <main>
+        {record === null ? (
+          <EmptySheet opening={opening} />
+        ) : (
+          <>
+            <RecordPanel record={record} />
+            <div className="bench">
+              <CandidateTable record={record} />
+              <Evidence record={record} />
+            </div>
+            <Detail record={record} />
+            <PredictStation record={record} />
+            <DossierBar />
+          </>
+        )}
+      </main>
+      {over && <p className="takes">Let go: the record is read, nothing is computed yet.</p>}
+    </div>
+  );
+}

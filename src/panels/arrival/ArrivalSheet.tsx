@@ -1,0 +1,73 @@
+import { useEffect, useRef } from 'react';
+import { failureText } from '../../format/failureText.ts';
+import { dialectSentence, noteSentence } from '../../format/dialectText.ts';
+import { formatInterval } from '../../format/axisTime.ts';
+import { counted } from '../../format/numbers.ts';
+import type { Arrival } from '../../state/appState.ts';
+import { useActions } from '../../state/useApp.ts';
+import { DialectControls } from './DialectControls.tsx';
+import { PreviewTable } from './PreviewTable.tsx';
+import { Questions } from './Questions.tsx';
+
+/** A file before the record is taken from it: what was detected, each with a control, and a preview. Nothing is computed yet. */
+export function ArrivalSheet({ arrival }: { readonly arrival: Arrival }) {
+  const actions = useActions();
+  const heading = useRef<HTMLHeadingElement>(null);
+  const { answer, fileName, fraction } = arrival;
+  useEffect(() => heading.current?.focus(), [fileName]);
+
+  const record = answer?.record ?? null;
+  const sniffed = answer?.sniffed ?? null;
+  const failure = answer?.failure ?? null;
+  const words = failure === null ? null : failureText(failure);
+  return (
+    <section className="arrival" aria-labelledby="arrival-name">
+      <div className="arrival-head">
+        <h2 id="arrival-name" tabIndex={-1} ref={heading}>
+          Reading {fileName}
+        </h2>
+        <button type="button" className="main-action" disabled={record === null} onClick={actions.acceptArrival}>
+          Use this record
+        </button>
+        <button type="button" onClick={actions.dismissArrival}>
+          Dismiss
+        </button>
+      </div>
+      {answer === null && (
+        <p>
+          <progress max={1} value={fraction} aria-label="Reading" /> reading …
+        </p>
+      )}
+      {words !== null && (
+        <div className="notice trouble" role="alert">
+          <p>
+            <strong>{words.what}</strong> {words.where !== '' && <span className="where">{words.where}</span>}{' '}
+            {words.todo}
+          </p>
+        </div>
+      )}
+      {sniffed !== null && (
+        <>
+          <p className="sentence">{dialectSentence(sniffed)}</p>
+          {record !== null && (
+            <p>
+              Record “{record.name}”: {counted(record.series.values.length, 'place')},{' '}
+              {formatInterval(record.series.axis)}
+              {record.series.unit === '' ? '' : `, in ${record.series.unit}`}.
+            </p>
+          )}
+          <Questions questions={sniffed.questions} columns={sniffed.columns} />
+          {record !== null && record.notes.length > 0 && (
+            <ul className="plain">
+              {record.notes.map((one) => (
+                <li key={one.kind}>{noteSentence(one)}</li>
+              ))}
+            </ul>
+          )}
+          <DialectControls sniffed={sniffed} />
+          <PreviewTable sniffed={sniffed} />
+        </>
+      )}
+    </section>
+  );
+}

@@ -1,0 +1,57 @@
+import { useEffect, useRef } from 'react';
+import type { Figure } from '../../figures/figure.ts';
+import { enqueueDrawing } from './drawQueue.ts';
+
+interface PlotProps {
+  readonly figure: Figure;
+  readonly label: string;
+  readonly height: number;
+}
+
+/** A chart. Its text alternative stands beside it; the drawing itself is hidden from readers of the screen. */
+export function Plot({ figure, label, height }: PlotProps) {
+  const frame = useRef<HTMLDivElement>(null);
+  const current = useRef(figure);
+
+  useEffect(() => {
+    const element = frame.current;
+    if (element === null) return undefined;
+    current.current = figure;
+    let gone = false;
+    const redraw = () =>
+      enqueueDrawing(async () => {
+        if (gone || current.current !== figure) return;
+        const width = element.clientWidth;
+        if (width === 0) return;
+        const { draw } = await import('./plotlyBundle.ts');
+        await draw(element, figure, { width, height });
+        element.dataset['drawn'] = 'true';
+      });
+    redraw();
+    let width = element.clientWidth;
+    const observer = new ResizeObserver(() => {
+      if (Math.abs(element.clientWidth - width) < 2) return;
+      width = element.clientWidth;
+      redraw();
+    });
+    observer.observe(element);
+    return () => {
+      gone = true;
+      observer.disconnect();
+    };
+  }, [figure, height]);
+
+  useEffect(() => {
+    const element = frame.current;
+    return () => {
+      if (element !== null) void import('./plotlyBundle.ts').then(({ erase }) => erase(element));
+    };
+  }, []);
+
+  return (
+    <figure className="plot" aria-label={label}>
+      <div ref={frame} className="plot-frame" style={{ height }} aria-hidden="true" />
+      <figcaption className="unseen">{figure.says}</figcaption>
+    </figure>
+  );
+}

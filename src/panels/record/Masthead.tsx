@@ -1,0 +1,54 @@
+import { useRef } from 'react';
+import { activeRecord } from '../../state/selectors.ts';
+import { useActions, useAppState } from '../../state/useApp.ts';
+import { ThemeSwitch } from '../../components/ThemeSwitch.tsx';
+import { PasteField } from './PasteField.tsx';
+import { Examples } from './Examples.tsx';
+
+/** Name of the program and what can be done with records: open, paste, examples, forget, undo. */
+export function Masthead() {
+  const actions = useActions();
+  const record = useAppState(activeRecord);
+  const undoDepth = useAppState((state) => state.undoDepth);
+  const redoDepth = useAppState((state) => state.redoDepth);
+  const input = useRef<HTMLInputElement>(null);
+
+  return (
+    <header className="masthead">
+      <h1>Lagwright</h1>
+      <div className="tools">
+        <button type="button" className="main-action" onClick={() => input.current?.click()}>
+          Open record
+        </button>
+        <input
+          ref={input}
+          className="unseen"
+          type="file"
+          accept=".csv,.tsv,.txt,.dat,.json,text/*"
+          aria-label="Record file"
+          tabIndex={-1}
+          onChange={(event) => {
+            const [file] = event.target.files ?? [];
+            if (file !== undefined) void actions.openFile(file);
+            event.target.value = '';
+          }}
+        />
+        <PasteField />
+        <Examples />
+        {record !== null && (
+          <button type="button" onClick={actions.forgetRecord}>
+            Forget record
+          </button>
+        )}
+        <span className="spring" />
+        <button type="button" onClick={actions.undo} disabled={undoDepth === 0}>
+          Undo
+        </button>
+        <button type="button" onClick={actions.redo} disabled={redoDepth === 0}>
+          Redo
+        </button>
+        <ThemeSwitch />
+      </div>
+    </header>
+  );
+}

@@ -1,0 +1,75 @@
+import { useMemo } from 'react';
+import { recordFigure } from '../../figures/recordFigure.ts';
+import { gapRuns } from '../../figures/gapRuns.ts';
+import { formatInterval, formatSpan } from '../../format/axisTime.ts';
+import { noteSentence } from '../../format/dialectText.ts';
+import { counted } from '../../format/numbers.ts';
+import type { RecordState } from '../../state/appState.ts';
+import { chosenRow } from '../../state/selectors.ts';
+import { useAppState } from '../../state/useApp.ts';
+import { Plot } from '../plot/Plot.tsx';
+import { usePalette } from '../plot/usePalette.ts';
+
+/** The record along the top, with the innovations of the chosen candidate beneath it on the same time axis. */
+export function RecordPanel({ record }: { readonly record: RecordState }) {
+  const row = useAppState(chosenRow);
+  const prediction = useAppState((state) => state.prediction);
+  const palette = usePalette();
+  const { source } = record;
+  const evidence = row?.progress.kind === 'fitted' ? (row.progress.judgement?.evidence ?? null) : null;
+  const forecast = prediction?.rowId === row?.id ? (prediction?.prediction ?? null) : null;
+  const figure = useMemo(
+    () =>
+      source.kind === 'loaded'
+        ? recordFigure(
+            { series: source.record.series, name: source.record.name, evidence, prediction: forecast },
+            palette,
+          )
+        : null,
+    [source, evidence, forecast, palette],
+  );
+
+  if (source.kind === 'wanted' || figure === null)
+    return (
+      <section className="record wanted" aria-labelledby="record-name" id="panel-record">
+        <h2 id="record-name">The record of this session is wanted</h2>
+        <p>
+          The link brought {counted(record.rows.length, 'candidate')} and all settings, but not the readings. Drop or
+          open the file they were made with; its fingerprint is checked (file {record.fileHash.slice(0, 12)}…, readings{' '}
+          {record.seriesHash.slice(0, 12)}…).
+        </p>
+      </section>
+    );
+
+  const { series, name, notes } = source.record;
+  const gaps = series.values.reduce((sum, value) => sum + (Number.isNaN(value) ? 1 : 0), 0);
+  return (
+    <section className="record" aria-labelledby="record-name" id="panel-record">
+      <div className="record-head">
+        <h2 id="record-name">
+          {name}
+          {series.unit !== '' && <span className="unit"> {series.unit}</span>}
+        </h2>
+        {source.example && <span className="tag">Invented example</span>}
+        <p className="facts">
+          {source.fileName} · {counted(series.values.length - gaps, 'reading')}, {formatInterval(series.axis)} ·{' '}
+          {formatSpan(series.axis, record.window)} ·{' '}
+          {gaps === 0
+            ? 'no gaps'
+            : `${counted(gaps, 'missing reading')} in ${counted(gapRuns(series.values).length, 'gap')}`}
+        </p>
+        {notes.length > 0 && (
+          <details className="drawer notes">
+            <summary>{counted(notes.length, 'note')} from reading</summary>
+            <ul className="drawer-body">
+              {notes.map((one) => (
+                <li key={one.kind}>{noteSentence(one)}</li>
+              ))}
+            </ul>
+          </details>
+        )}
+      </div>
+      <Plot figure={figure} label={evidence === null ? 'Record' : 'Record and innovations'} height={280} />
+    </section>
+  );
+}
