@@ -11,7 +11,7 @@ import type { Job } from './fitCandidate.ts';
 import { fitWarnings } from './fitWarnings.ts';
 import { recordWarnings } from './recordWarnings.ts';
 import type { Terrain } from './search/climb.ts';
-import type { Exploration, Summit } from './search/exploreMaxima.ts';
+import type { Exploration, Summit } from './search/survey.ts';
 import { searchMaxima } from './search/searchMaxima.ts';
 import { SearchSpace, type Coefficients } from './search/searchSpace.ts';
 

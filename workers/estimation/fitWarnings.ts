@@ -3,7 +3,7 @@ import type { Warning } from '../contract/fit.ts';
 import type { CovarianceEnd } from './covarianceFromHessian.ts';
 import { largestArModulus, largestMaModulus, nearestPair } from './search/admissibility.ts';
 import { rootPairSpread } from './search/rootPairSpread.ts';
-import type { Exploration, Summit } from './search/exploreMaxima.ts';
+import type { Exploration, Summit } from './search/survey.ts';
 import type { Coefficients } from './search/searchSpace.ts';
 
 export interface WarningGrounds {

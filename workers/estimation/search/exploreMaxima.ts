@@ -1,35 +1,33 @@
 import type { Random } from '../../numeric/random.ts';
-import { isAdmissible } from './admissibility.ts';
-import { climb, type ClimbOptions, type Landing, type Terrain } from './climb.ts';
-import { isMaximumAcross, settleOnFace } from './settleOnFace.ts';
-import { samePlace } from './samePlace.ts';
+import type { Terrain } from './climb.ts';
+import { Survey, type Exploration, type Trial } from './survey.ts';
 
-/** A local maximum met by the search. */
-export interface Summit {
-  readonly landing: Landing;
-  readonly reached: number;
-  readonly admissible: boolean;
-}
-
-export interface Exploration {
-  /** Distinct local maxima, highest first. */
-  readonly summits: readonly Summit[];
-  readonly starts: number;
-  readonly iterations: number;
-  readonly evaluations: number;
-}
-
-const OPTIONS: ClimbOptions = { maximumIterations: 120, gain: 1e-8 };
 /** Screened random starts for each coefficient, up to so many coefficients: beyond, random starts are hopeless. */
 const RANDOM_PER_COEFFICIENT = 12;
 const MOST_RANDOM = 8;
-/** Starts climbed from: an autoregression has hardly ever a second maximum, mixed models have several. */
-const CLIMBED_PURE = 3;
-const CLIMBED = 6;
-const CLIMBED_PER_COEFFICIENT = 2;
-const CLIMBED_MOST = 22;
-/** Starts climbed from within the admissible set where all else left it. */
-const FENCED = 5;
+/** Starts tried by a few iterations, and how many of these are climbed to the end. */
+const TRIED = 10;
+const TRIED_PER_COEFFICIENT = 4;
+const FINISHED = 5;
+/** An autoregression has hardly ever a second maximum. */
+const TRIED_PURE = 4;
+const FINISHED_PURE = 2;
+/** The same for each face of the MA set. */
+const TRIED_FACE = 6;
+const FINISHED_FACE = 3;
+/** Starts the quick answer climbs from, one after the other, until an end is admissible. */
+const QUICK = 4;
+/** Cosines of the angles that a pair of MA roots on the circle is tried at. */
+const ANGLES = Array.from({ length: 24 }, (_, i) => Math.cos((Math.PI * (i + 0.5)) / 24));
+
+/** Coordinates to start from, by where they come from. */
+export interface Starts {
+  readonly reasoned: readonly Float64Array[];
+  readonly oscillating: readonly Float64Array[];
+  readonly ridges: readonly Float64Array[];
+  /** Parameters handed in, such as those of smaller models. */
+  readonly given: readonly Float64Array[];
+}
 
 /**
  * The quick answer: the highest of the given starts is climbed from, and the end put on the unit circle where it ran
@@ -37,159 +35,70 @@ const FENCED = 5;
  */
 export function climbFromBest(terrain: Terrain, starts: readonly Float64Array[]): Exploration {
   const survey = new Survey(terrain);
-  const ranked = survey.screen(starts);
-  for (const { x } of ranked.slice(0, 2)) {
-    survey.climbFrom(x);
+  const ranked = survey.screen(starts.map(interior));
+  for (const trial of ranked.slice(0, QUICK)) {
+    survey.finish(trial);
     if (survey.hasAdmissible()) break;
   }
-  return survey.report(ranked.map(({ x }) => x));
+  return survey.report(ranked);
 }
 
 /**
- * The wide search: given starts and seeded random ones are screened by one evaluation each, the most promising are
- * climbed from, then every face of the MA set is searched from the best ends so far.
+ * The wide search, each stage choosing for the next: all starts are screened by one evaluation each, the most promising
+ * tried by a few iterations, the best of these climbed to the end; then every face of the MA set in the same way, from
+ * the best ends so far.
  *
- * @param starts coordinates of the starts that have a reason; all of `climbAlways` are climbed from
+ * @param starts see Starts; the best of the reasoned ones and all given ones are climbed from to the end
  * @param random source of the random starts: partial autocorrelations uniform in (−0.95, 0.95)
  */
-export function exploreMaxima(
-  terrain: Terrain,
-  starts: readonly Float64Array[],
-  climbAlways: readonly Float64Array[],
-  random: Random,
-): Exploration {
+export function exploreMaxima(terrain: Terrain, starts: Starts, random: Random): Exploration {
   const { space } = terrain;
   const survey = new Survey(terrain);
   const k = space.dimension;
-  const mixed = space.faces().length > 0;
+  const faces = space.faces();
+  const mixed = faces.length > 0;
   const scattered = Array.from({ length: mixed ? RANDOM_PER_COEFFICIENT * Math.min(k, MOST_RANDOM) : k }, () =>
     Float64Array.from({ length: k }, (_, i) => (space.isPartial(i) ? 1.9 : 0.6) * (random.uniform() - 0.5)),
   );
-  const ranked = survey.screen([...climbAlways, ...starts, ...scattered]);
-  const chosen = spread(
-    ranked.map(({ x }) => x),
-    mixed ? Math.min(CLIMBED_MOST, CLIMBED + CLIMBED_PER_COEFFICIENT * k) : CLIMBED_PURE,
+  const { reasoned, oscillating, ridges, given } = starts;
+  const [first] = survey.screen([...reasoned, ...given].map(interior));
+  for (const trial of [...(first === undefined ? [] : [first]), ...given.map(interior)]) survey.finish(trial);
+  const ranked = survey.screen([...reasoned, ...ridges, ...oscillating, ...scattered].map(interior));
+  const size = Math.min(k, MOST_RANDOM);
+  survey.explore(
+    ranked,
+    mixed ? TRIED + TRIED_PER_COEFFICIENT * size : TRIED_PURE,
+    mixed ? FINISHED + size : FINISHED_PURE,
   );
-  for (const x of [...climbAlways, ...chosen]) survey.climbFrom(x);
-  for (const face of space.faces()) survey.searchFace(face.coordinate, face.value);
-  return survey.report(chosen);
+  const ends = survey.highest(2);
+  for (const { coordinate, value } of faces) {
+    const bases = space.isPairFace(coordinate) ? [...ends, ...oscillating] : ends;
+    const onFace = [...bases, new Float64Array(k)].flatMap((x) => faceTrials(terrain, x, coordinate, value));
+    survey.explore(survey.screen(onFace), TRIED_FACE, FINISHED_FACE);
+  }
+  return survey.report(ranked);
 }
 
-/** The first `count` of a ranked list, passing over those close to one already chosen. */
-function spread(ranked: readonly Float64Array[], count: number): Float64Array[] {
-  const chosen: Float64Array[] = [];
-  for (const x of ranked) {
-    if (chosen.length === count) break;
-    if (chosen.every((other) => x.some((value, i) => Math.abs(value - other[i]!) > 0.1))) chosen.push(x);
-  }
-  return chosen;
+function interior(x: Float64Array): Trial {
+  return { x, held: new Int8Array(x.length) };
 }
 
-/** Keeps the maxima met so far and counts the work. */
-class Survey {
-  private readonly terrain: Terrain;
-  private readonly found: { landing: Landing; reached: number; admissible: boolean }[] = [];
-  private starts = 0;
-  private iterations = 0;
-  private evaluations = 0;
-
-  constructor(terrain: Terrain) {
-    this.terrain = terrain;
-  }
-
-  /** Starts inside the space with their ln L, highest first. */
-  screen(starts: readonly Float64Array[]): { x: Float64Array; height: number }[] {
-    const height = heightOf(this.terrain);
-    this.evaluations += starts.length;
-    return starts
-      .map((x) => ({ x, height: height(x) }))
-      .filter(({ height }) => Number.isFinite(height))
-      .sort((one, other) => other.height - one.height);
-  }
-
-  climbFrom(x: Float64Array): void {
-    this.climbWith(x, new Int8Array(x.length));
-  }
-
-  /** Climbs along one face from the best two ends so far and from the middle; ends that are no maxima are left out. */
-  searchFace(coordinate: number, value: 1 | -1): void {
-    const ends = [...this.found].sort((one, other) => other.landing.logLikelihood - one.landing.logLikelihood);
-    const from = [...ends.slice(0, 2).map(({ landing }) => landing.x), new Float64Array(this.terrain.space.dimension)];
-    for (const x of from) {
-      const held = new Int8Array(x.length);
-      held[coordinate] = value;
-      const start = x.slice();
-      start[coordinate] = value;
-      this.climbWith(start, held);
-    }
-  }
-
-  private climbWith(start: Float64Array, held: Int8Array): void {
-    const best = this.found.reduce(
-      (most, { landing, admissible }) => (admissible ? Math.max(most, landing.logLikelihood) : most),
-      -Infinity,
-    );
-    const end = climb(this.terrain, start, held, { ...OPTIONS, best });
-    this.add(end.hopeless ? end : settleOnFace(this.terrain, end, OPTIONS));
-  }
-
-  hasAdmissible(): boolean {
-    return this.found.some(({ admissible }) => admissible);
-  }
-
-  /**
-   * The maxima met. Where every climb left the admissible set (models with pairs of roots to spare do that), `starts`
-   * are climbed from once more within it, so that there is an answer: the model without the pairs is always there.
-   */
-  report(starts: readonly Float64Array[]): Exploration {
-    for (const x of starts.slice(0, FENCED)) {
-      if (this.hasAdmissible()) break;
-      this.add(climb(this.terrain, x, new Int8Array(x.length), { ...OPTIONS, fenced: true }));
-    }
-    const summits = [...this.found].sort((one, other) => other.landing.logLikelihood - one.landing.logLikelihood);
-    return { summits, starts: this.starts, iterations: this.iterations, evaluations: this.evaluations };
-  }
-
-  private add(landing: Landing): void {
-    this.starts++;
-    this.iterations += landing.iterations;
-    this.evaluations += landing.evaluations;
-    if (landing.hopeless || !Number.isFinite(landing.logLikelihood)) return;
-    const height = heightOf(this.terrain);
-    // Climbs given up on the way to the circle have no end of their own: they count as one.
-    const lost = landing.status === 'abandoned';
-    const known = this.found.find((other) =>
-      lost ? other.landing.status === 'abandoned' : samePlace(height, other.landing, landing),
-    );
-    if (known !== undefined) {
-      known.reached++;
-      if (landing.logLikelihood > known.landing.logLikelihood) known.landing = landing;
-      known.admissible = this.isAdmissible(known.landing);
-      return;
-    }
-    const end = isMaximumAcross(this.terrain, landing) ? landing : this.climbOff(landing);
-    if (end !== null) this.found.push({ landing: end, reached: 1, admissible: this.isAdmissible(end) });
-  }
-
-  private isAdmissible({ status, x }: Landing): boolean {
-    const { space, season } = this.terrain;
-    return status !== 'abandoned' && space.place(x) && isAdmissible(space.coefficients, season);
-  }
-
-  /** From a point on a face that is higher inside: the interior maximum beside it, or null where that is known. */
-  private climbOff(landing: Landing): Landing | null {
-    const free = new Int8Array(landing.x.length);
-    const inside = landing.x.map((x, i) => (landing.held[i] === 0 ? x : 0.98 * x));
-    const end = climb(this.terrain, inside, free, OPTIONS);
-    this.iterations += end.iterations;
-    this.evaluations += end.evaluations;
-    const height = heightOf(this.terrain);
-    const known = this.found.some((other) => samePlace(height, other.landing, end));
-    return known || !(end.logLikelihood >= landing.logLikelihood) ? null : end;
-  }
-}
-
-/** ln L at coordinates, −∞ outside. */
-function heightOf({ space, height }: Terrain): (x: Float64Array) => number {
-  return (x) => (space.place(x) ? height(space.coefficients) : -Infinity);
+/**
+ * A point moved onto a face; for a pair of roots also at other angles, which the coordinate before it sets: all round, and
+ * a few steps of 1/n to either side of its own, for the maxima are that narrow.
+ */
+function faceTrials({ space, readings }: Terrain, x: Float64Array, coordinate: number, value: 1 | -1): Trial[] {
+  const held = new Int8Array(x.length);
+  held[coordinate] = value;
+  const moved = x.slice();
+  moved[coordinate] = value;
+  if (!space.isPairFace(coordinate)) return [{ x: moved, held }];
+  const here = Math.acos(Math.max(-1, Math.min(1, x[coordinate - 1]!)));
+  const beside = [-4, -2, 2, 4].map((steps) => Math.cos(here + (steps * Math.PI) / readings));
+  const turned = [...ANGLES, ...beside].map((cosine) => {
+    const other = moved.slice();
+    other[coordinate - 1] = cosine;
+    return { x: other, held };
+  });
+  return [{ x: moved, held }, ...turned];
 }

@@ -1,8 +1,10 @@
 import type { Candidate, FitRequest, Parameters } from '../../contract/candidate.ts';
 import { createRandom } from '../../numeric/random.ts';
+import { oscillationStarts } from '../starts/oscillationStarts.ts';
 import { startingPoints, withCancellingPair } from '../starts/startingPoints.ts';
 import type { Terrain } from './climb.ts';
-import { climbFromBest, exploreMaxima, type Exploration } from './exploreMaxima.ts';
+import { climbFromBest, exploreMaxima } from './exploreMaxima.ts';
+import type { Exploration } from './survey.ts';
 import { polish } from './polish.ts';
 
 /** Maxima this far below the best in ln L are reported with it. */
@@ -14,7 +16,7 @@ const WITHIN = 2;
  * @param terrain space and profile likelihood
  * @param centred the (differenced, transformed) record less its level, for starting values
  * @param request seed, effort and further starts
- * @returns maxima, highest first; of the inadmissible ones only those above the best admissible one
+ * @returns maxima, highest first; of inadmissible ones above them only the highest
  */
 export function searchMaxima(
   terrain: Terrain,
@@ -26,10 +28,17 @@ export function searchMaxima(
   const own = startingPoints(space, candidate, centred);
   const given = request.starts ?? [];
   const embedded = given.map((start) => space.locate(start));
-  const found =
-    request.effort === 'first'
-      ? climbFromBest(terrain, [...own, ...embedded])
-      : exploreMaxima(terrain, [...own, ...ridges(terrain, candidate, given)], embedded, createRandom(request.seed));
+  if (request.effort === 'first') return withPolish(terrain, climbFromBest(terrain, [...own, ...embedded]));
+  const found = exploreMaxima(
+    terrain,
+    {
+      reasoned: own,
+      oscillating: oscillationStarts(space, candidate, centred),
+      ridges: ridges(terrain, candidate, given),
+      given: embedded,
+    },
+    createRandom(request.seed),
+  );
   return withPolish(terrain, found);
 }
 
@@ -42,14 +51,18 @@ function withPolish(terrain: Terrain, found: Exploration): Exploration {
   if (best === undefined) return found;
   const top = best.landing.logLikelihood;
   let evaluations = found.evaluations;
-  const summits = found.summits
-    .filter(({ landing, admissible }) => landing.logLikelihood >= (admissible ? top - WITHIN : top))
+  const polished = found.summits
+    .filter(({ landing, admissible }) => admissible && landing.logLikelihood >= top - WITHIN)
     .map((summit) => {
-      if (!summit.admissible) return summit;
       const landing = polish(terrain, summit.landing);
       evaluations += landing.evaluations - summit.landing.evaluations;
       return { ...summit, landing };
-    })
-    .sort((one, other) => other.landing.logLikelihood - one.landing.logLikelihood);
+    });
+  // Climbs towards a spurious pair end where they are given up, at no definite place: the highest stands for them.
+  const excluded = found.summits.filter(({ landing, admissible }) => !admissible && landing.logLikelihood > top);
+  const reached = excluded.reduce((sum, summit) => sum + summit.reached, 0);
+  const summits = [...excluded.slice(0, 1).map((summit) => ({ ...summit, reached })), ...polished].sort(
+    (one, other) => other.landing.logLikelihood - one.landing.logLikelihood,
+  );
   return { ...found, summits, evaluations };
 }

@@ -188,6 +188,19 @@ export class SearchSpace {
     });
   }
 
+  /** True where coordinate i is the second of its factor: on its face −1 a pair of roots is on the circle. */
+  isPairFace(i: number): boolean {
+    return this.factorOf(i).start === i - 1;
+  }
+
+  /** First of the two coordinates that set a pair of regular AR roots; null where there are no two. */
+  arPair(): number | null {
+    const factor = this.factors.find(
+      ({ ma, seasonal, kind, lags }) => !ma && !seasonal && kind === 'partial' && lags.length > 1,
+    );
+    return factor?.start ?? null;
+  }
+
   private factorOf(i: number): Factor {
     const found = this.factors.find(({ start, lags }) => i >= start && i < start + lags.length);
     if (found === undefined) throw new RangeError(`The search space has no coordinate ${i}.`);

@@ -23,6 +23,8 @@ export function startingPoints(space: SearchSpace, candidate: Candidate, centred
     [0.5, 0.3],
     [0.9, -0.5],
     [-0.5, 0.3],
+    [0.95, -0.8],
+    [-0.95, 0.8],
     [0, -0.7],
     [0, 0.7],
   ] as const) {
