@@ -61,7 +61,7 @@ function notUsable(values: Float64Array, column: string, rows: number): Failure 
 
 /** A record without time: one reading a row. */
 function numbered(rows: number): { found: GridFound; placement: Placement } {
-  const found: GridFound = { grid: INDEX_GRID, start: 1, places: rows, bad: 0, stamps: rows };
+  const found: GridFound = { grid: INDEX_GRID, start: 1, places: rows, bad: 0, stamps: rows, exact: true };
   return {
     found,
     placement: placeOnGrid(

@@ -1,6 +1,6 @@
 import type { Dialect } from '../../contract/dialect.ts';
 import { findMonths, monthOf } from './findMonths.ts';
-import { DEFAULT_TOLERANCE, findStep } from './findStep.ts';
+import { DEFAULT_TOLERANCE, EXACT, findStep } from './findStep.ts';
 
 export type Grid = NonNullable<Dialect['grid']>;
 
@@ -12,6 +12,8 @@ export interface GridFound {
   /** Stamps that do not fit, of `stamps` distinct ones. */
   readonly bad: number;
   readonly stamps: number;
+  /** Whether the stamps lie on the grid but for rounding. */
+  readonly exact: boolean;
 }
 
 /** Distinct readable stamps in ascending order. */
@@ -60,7 +62,7 @@ export function findGrid(times: Float64Array, calendar: boolean, wanted: Grid | 
   ): GridFound => {
     const start = monthOf(first);
     const places = Math.floor((monthOf(last) - start) / step) + 1;
-    return { grid: { kind: 'months', step, rule, tolerance }, start, places, bad, stamps };
+    return { grid: { kind: 'months', step, rule, tolerance }, start, places, bad, stamps, exact: false };
   };
   if (wanted !== null && wanted.kind !== 'index' && calendar) {
     if (wanted.kind === 'months')
@@ -70,7 +72,7 @@ export function findGrid(times: Float64Array, calendar: boolean, wanted: Grid | 
   const months = calendar ? findMonths(distinct) : null;
   if (months?.exact === true) return monthly(months.step, months.bad);
   const found = regular(distinct, calendar, wanted);
-  if (months !== null && found.bad > 0.02 * stamps && months.bad <= found.bad) return monthly(months.step, months.bad);
+  if (months !== null && !found.exact && months.bad <= found.bad) return monthly(months.step, months.bad);
   return found;
 }
 
@@ -82,11 +84,11 @@ function regular(distinct: Float64Array, calendar: boolean, wanted: Grid | null)
     const { step } = wanted;
     const whole = wanted.rule === 'binMean' ? Math.floor : Math.ceil;
     const start = whole(first / step) * step;
-    return { grid: { ...wanted, kind }, start, places: whole((last - start) / step) + 1, bad: 0, stamps };
+    return { grid: { ...wanted, kind }, start, places: whole((last - start) / step) + 1, bad: 0, stamps, exact: false };
   }
   const found = findStep(distinct, calendar, wanted?.step);
   const grid: Grid = { kind, step: found.step, rule: 'nearest', tolerance: wanted?.tolerance ?? DEFAULT_TOLERANCE };
   const start = startFrom(first, found.phase, found.step);
   const places = Math.round((last - start) / found.step) + 1;
-  return { grid, start: Number(start.toPrecision(15)), places, bad: found.bad, stamps };
+  return { grid, start: Number(start.toPrecision(15)), places, bad: found.bad, stamps, exact: found.distance < EXACT };
 }

@@ -20,7 +20,7 @@ const DISTANCE_COST = 0.1;
 /** An interval that no clock has must fit by this much better than one that a clock has. */
 const ODD_COST = 0.002;
 /** Mean distances below this fraction of the step are rounding. */
-const EXACT = 1e-7;
+export const EXACT = 1e-7;
 const MOST_DIFFERENCES = 200_000;
 /** Differences closer than this fraction of the median are the same (rounding of decimals). */
 const SAME = 1e-6;
