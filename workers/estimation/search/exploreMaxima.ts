@@ -33,14 +33,18 @@ export interface Starts {
  * The quick answer: the highest of the given starts is climbed from, and the end put on the unit circle where it ran
  * there.
  */
-export function climbFromBest(terrain: Terrain, starts: readonly Float64Array[]): Exploration {
+export function climbFromBest(
+  terrain: Terrain,
+  starts: readonly Float64Array[],
+  given: readonly Float64Array[],
+): Exploration {
   const survey = new Survey(terrain);
-  const ranked = survey.screen(starts.map(interior));
+  const ranked = survey.screen([...starts, ...given].map(interior));
   for (const trial of ranked.slice(0, QUICK)) {
     survey.finish(trial);
     if (survey.hasAdmissible()) break;
   }
-  return survey.report(ranked);
+  return survey.report(ranked, given.map(interior));
 }
 
 /**
@@ -76,7 +80,7 @@ export function exploreMaxima(terrain: Terrain, starts: Starts, random: Random):
     const onFace = [...bases, new Float64Array(k)].flatMap((x) => faceTrials(terrain, x, coordinate, value));
     survey.explore(survey.screen(onFace), TRIED_FACE, FINISHED_FACE);
   }
-  return survey.report(ranked);
+  return survey.report(ranked, given.map(interior));
 }
 
 function interior(x: Float64Array): Trial {

@@ -28,7 +28,7 @@ export function searchMaxima(
   const own = startingPoints(space, candidate, centred);
   const given = request.starts ?? [];
   const embedded = given.map((start) => space.locate(start));
-  if (request.effort === 'first') return withPolish(terrain, climbFromBest(terrain, [...own, ...embedded]));
+  if (request.effort === 'first') return withPolish(terrain, climbFromBest(terrain, own, embedded));
   const found = exploreMaxima(
     terrain,
     {

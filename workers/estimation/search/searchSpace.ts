@@ -126,14 +126,13 @@ export class SearchSpace {
       const { lags, start, signed, partials, sign } = factor;
       const part = parts[own.indexOf(factor.coefficients)]!;
       const length = signed.length;
-      let shrink = 1;
       for (let attempt = 0; attempt < 200; attempt++) {
+        const shrink = attempt < 3 ? 1 - attempt * 1e-4 : 0.97 ** (attempt - 2);
         for (let i = 0; i < length; i++) {
           const kept = factor.kind === 'partial' || lags.includes(i) ? (part[i] ?? 0) : 0;
           signed[i] = sign * kept * shrink ** (i + 1);
         }
         if (inversePartialMap(signed, partials)) break;
-        shrink *= 0.97;
       }
       for (let i = 0; i < lags.length; i++) {
         x[start + i] = factor.kind === 'partial' ? partials[i]! : sign * signed[lags[i]!]!;

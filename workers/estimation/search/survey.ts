@@ -30,6 +30,8 @@ const TRY = 6;
 /** Starts, and ends of tries, closer than this in every coordinate are one. */
 const APART_STARTS = 0.1;
 const APART_TRIES = 0.03;
+/** Rounding of ln L that is not called lower. */
+const LEVEL = 1e-9;
 /** Starts climbed from within the admissible set where all else left it. */
 const FENCED = 5;
 
@@ -86,9 +88,15 @@ export class Survey {
 
   /**
    * The maxima met. Where every climb left the admissible set (models with pairs of roots to spare do that), `trials`
-   * are climbed from once more within it, so that there is an answer: the model without the pairs is always there.
+   * are climbed from once more within it, so that there is an answer: the model without the pairs is always there. The
+   * same for a given point, such as a smaller model, that would otherwise be higher than every end.
    */
-  report(trials: readonly Trial[]): Exploration {
+  report(trials: readonly Trial[], given: readonly Trial[]): Exploration {
+    const height = heightOf(this.terrain);
+    for (const { x, held } of given) {
+      if (this.best() >= height(x) - LEVEL) continue;
+      this.add(climb(this.terrain, x, held, { ...OPTIONS, fenced: true }));
+    }
     for (const { x, held } of trials.slice(0, FENCED)) {
       if (this.hasAdmissible()) break;
       this.add(climb(this.terrain, x, held, { ...OPTIONS, fenced: true }));
