@@ -4,6 +4,7 @@ import { CandidateTable } from './panels/candidates/CandidateTable.tsx';
 import { DossierBar } from './panels/dossier/DossierBar.tsx';
 import { Detail } from './panels/evidence/Detail.tsx';
 import { Evidence } from './panels/evidence/Evidence.tsx';
+import { SizeAndShape } from './panels/evidence/SizeAndShape.tsx';
 import { Notices } from './panels/notices/Notices.tsx';
 import { PredictStation } from './panels/predict/PredictStation.tsx';
 import { EmptySheet } from './panels/record/EmptySheet.tsx';
@@ -68,7 +69,10 @@ export function App() {
           <>
             <RecordPanel record={record} />
             <div className="bench">
-              <CandidateTable record={record} />
+              <div className="left">
+                <CandidateTable record={record} />
+                <SizeAndShape record={record} />
+              </div>
               <Evidence record={record} />
             </div>
             <Detail record={record} />

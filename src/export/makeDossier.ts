@@ -1,20 +1,19 @@
-import type { Judgement } from '../../workers/contract/diagnostics.ts';
-import type { View } from '../../workers/contract/envelope.ts';
-import type { Fit } from '../../workers/contract/fit.ts';
-import type { Prediction } from '../../workers/contract/prediction.ts';
-import type { RecordState, Source } from '../state/appState.ts';
+import { lagFigure } from '../figures/lagFigure.ts';
+import { predictionFigure, recordFigure } from '../figures/recordFigure.ts';
+import { lightPalette } from './lightPalette.ts';
+import { writePdf } from './pdf/writePdf.ts';
+import { buildReport } from './report/buildReport.ts';
+import type { ReportInput } from './report/reportInput.ts';
 
-export interface DossierInput {
-  readonly record: RecordState;
-  readonly source: Extract<Source, { kind: 'loaded' }>;
-  readonly fit: Fit;
-  readonly judgement: Judgement;
-  readonly prediction: Prediction | null;
-  readonly view: View;
-  readonly madeAt: Date;
-  readonly page: string;
-}
-
-export function makeDossier(input: DossierInput): Promise<Blob> {
-  return Promise.reject(new Error(input.page));
+/** The dossier of a fit as a PDF. The figures are those of the page, in the light theme. */
+export async function makeDossier(input: ReportInput): Promise<Blob> {
+  const palette = lightPalette();
+  const { series, name } = input.record;
+  const { evidence } = input.judgement;
+  const figures = {
+    record: recordFigure({ series, name, evidence, prediction: null }, palette),
+    lags: lagFigure(evidence, palette),
+    prediction: input.prediction === null ? null : predictionFigure(series, name, input.prediction, palette),
+  };
+  return writePdf(buildReport(input), figures, palette);
 }

@@ -16,7 +16,7 @@ export function lagFigure({ correlogram, portmanteau }: Evidence, palette: Palet
   // The band as one area: along the upper edges, back along the lower ones. Areas lie under the bars as shapes; traces would cover them.
   const edge = (i: number, sign: 1 | -1): string[] => {
     const [left, right] = sign > 0 ? [-0.5, 0.5] : [0.5, -0.5];
-    return [left, right].map((shift) => `${lags[i]! + shift!},${sign * correlogram.bands[i]!}`);
+    return [left, right].map((shift) => `${lags[i]! + shift},${sign * correlogram.bands[i]!}`);
   };
   const upper = lags.flatMap((_, i) => edge(i, 1));
   const lower = lags.flatMap((_, i) => edge(lags.length - 1 - i, -1));

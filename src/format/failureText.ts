@@ -281,6 +281,12 @@ function readingText(failure: ReadingFailure): FailureText {
         `line ${failure.line}: “${failure.text}”`,
         'Export with semicolons or tabs between columns, or with a decimal point.',
       );
+    case 'repeatedStamps':
+      return say(
+        `${counted(failure.count, 'row')} repeat a time with another reading.`,
+        `first at line ${failure.line}: “${failure.text}”`,
+        'The times may have lost their seconds, or the file lists several tags: export full times, choose the tag column, or read it without time.',
+      );
     case 'unclosedQuote':
       return say(
         'A quotation mark is opened and never closed.',

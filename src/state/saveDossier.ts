@@ -16,17 +16,19 @@ export async function saveDossier(store: Store, platform: Platform): Promise<voi
   const { source } = record;
   try {
     const { makeDossier } = await import('../export/makeDossier.ts');
-    const prediction = state.prediction?.rowId === row.id ? state.prediction.prediction : null;
-    const link = platform.pageAddress();
+    const prediction = state.prediction?.fit === fit ? state.prediction.prediction : null;
     const content = await makeDossier({
-      record,
-      source,
+      fileName: source.fileName,
+      fileHash: record.fileHash,
+      example: source.example,
+      dialect: record.dialect,
+      repairs: record.repairs,
+      record: source.record,
       fit,
       judgement,
       prediction,
       view: state.view,
       madeAt: new Date(),
-      page: link,
     });
     const stem = source.fileName.replace(/\.[^.]*$/, '');
     platform.download(`${stem}-dossier.pdf`, content);

@@ -1,6 +1,6 @@
 import type { Correlogram } from '../../../workers/contract/diagnostics.ts';
 
-const most = 24;
+const most = 20;
 /** Correlations beyond this are drawn at the edge. */
 const largest = 0.3;
 const height = 26;

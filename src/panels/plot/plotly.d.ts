@@ -11,6 +11,7 @@ declare module 'plotly.js/lib/core' {
   const Plotly: {
     register(traces: readonly unknown[]): void;
     react(element: HTMLElement, data: Figure['data'], layout: object, config: object): Promise<PlotlyElement>;
+    toImage(figure: object, options: { format: 'svg'; width: number; height: number }): Promise<string>;
     purge(element: HTMLElement): void;
   };
   export default Plotly;

@@ -1,3 +1,4 @@
+import type { Figure } from '../../figures/figure.ts';
 import bar from 'plotly.js/lib/bar';
 import Plotly from 'plotly.js/lib/core';
 
@@ -18,9 +19,18 @@ export function draw(
   figure: { data: readonly object[]; layout: object },
   size: { width: number; height: number },
 ) {
-  return Plotly.react(element, figure.data as never, { ...figure.layout, ...size, autosize: false }, config);
+  return Plotly.react(element, figure.data, { ...figure.layout, ...size, autosize: false }, config);
 }
 
 export function erase(element: HTMLElement): void {
   Plotly.purge(element);
+}
+
+/** A figure as the text of one SVG document, drawn off the screen. */
+export async function svgText(figure: Figure, width: number, height: number): Promise<string> {
+  const address = await Plotly.toImage(
+    { data: figure.data, layout: { ...figure.layout, width, height } },
+    { format: 'svg', width, height },
+  );
+  return decodeURIComponent(address.slice(address.indexOf(',') + 1));
 }
