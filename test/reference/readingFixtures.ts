@@ -213,5 +213,9 @@ export const refusals: readonly Refusal[] = [
   { file: 'open-quote.csv', failure: { code: 'unclosedQuote', line: 9 } },
   { file: 'unreadable-stamps.csv', failure: { code: 'badStamp', line: 3, column: 1, text: 'shift 1', count: 12 } },
   { file: 'irregular-stamps.csv', failure: { code: 'noRegularAxis', rows: 24 } },
+  {
+    file: 'seconds-cut-off.csv',
+    failure: { code: 'repeatedStamps', line: 3, text: '2024-03-13 08:00', count: 13 },
+  },
   { file: 'mistyped-year.csv', failure: { code: 'gridTooLong', line: 12 } },
 ];

@@ -81,6 +81,8 @@ export type ReadingFailure =
   | { readonly code: 'ambiguousDates'; readonly line: number; readonly text: string }
   | { readonly code: 'noRegularAxis'; readonly rows: number; readonly interval: number; readonly offGrid: number }
   | { readonly code: 'gridTooLong'; readonly places: number; readonly limit: number; readonly line: number }
+  /** Many rows share a stamp with a row of another value: the stamps are cut off, or several tags stand in one column. */
+  | { readonly code: 'repeatedStamps'; readonly line: number; readonly text: string; readonly count: number }
   | { readonly code: 'unclosedQuote'; readonly line: number }
   /** Fields are separated by commas and numbers carry unquoted decimal commas: the columns cannot be told apart. */
   | { readonly code: 'decimalCommaClash'; readonly line: number; readonly text: string };

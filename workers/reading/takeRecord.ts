@@ -2,20 +2,26 @@ import type { Dialect } from '../contract/dialect.ts';
 import type { Failure } from '../contract/failures.ts';
 import type { ColumnProfile, ReadingNote, ReadRecord } from '../contract/reading.ts';
 import { hashValues } from '../series/hashValues.ts';
+import { checkPlaces } from './grid/checkPlaces.ts';
+import { clockTurns } from './grid/clockTurns.ts';
 import { fillGrid } from './grid/fillGrid.ts';
 import { findGrid, type Grid, type GridFound } from './grid/findGrid.ts';
 import { placeOnGrid, type Placement } from './grid/placeOnGrid.ts';
 import { noteOf } from './noteBook.ts';
-import { checkPlaces } from './grid/checkPlaces.ts';
-import { isNumeric } from './rows/profileColumns.ts';
+import { otherColumns } from './otherColumns.ts';
+import { findRows } from './rows/findRows.ts';
 import type { RowPlan, RowsRead } from './rows/readRows.ts';
 import { columnValues, gather, rowsOfTag } from './selectRows.ts';
 import { trueTimes } from './stamps/trueTimes.ts';
 
 /** Fewer readings than this carry no information about dependence between them. */
 export const NEEDED_READINGS = 8;
+/** Unreadable stamps beyond this share: they are read the wrong way, or it is no time column. */
+const MOST_BAD_STAMPS = 0.2;
 /** Stamps off the grid beyond this share: the record has no regular axis. */
 const MOST_OFF_GRID = 0.1;
+/** Rows that repeat a stamp with another reading beyond this share: it is not known which to keep. */
+const MOST_CONFLICTS = 0.2;
 const INDEX_GRID: Grid = { kind: 'index', step: 1, rule: 'nearest', tolerance: 0.25 };
 
 /** What the record is taken from. */
@@ -41,7 +47,14 @@ export interface Taken {
   readonly times: Float64Array | null;
 }
 
-const spread = (values: Float64Array): { numbers: number; constant: number | null } => {
+/** Rows on their grid. */
+interface Laid {
+  readonly found: GridFound;
+  readonly placement: Placement;
+  readonly zone: string | null;
+}
+
+function notUsable(values: Float64Array, column: string): Failure | null {
   let [numbers, first] = [0, NaN];
   let constant = true;
   for (const value of values) {
@@ -49,30 +62,19 @@ const spread = (values: Float64Array): { numbers: number; constant: number | nul
     if (numbers++ === 0) first = value;
     else if (value !== first) constant = false;
   }
-  return { numbers, constant: constant && numbers > 0 ? first : null };
-};
-
-function notUsable(values: Float64Array, column: string, rows: number): Failure | null {
-  const { numbers, constant } = spread(values);
-  if (numbers === 0) return { code: 'allGaps', column, rows };
+  if (numbers === 0) return { code: 'allGaps', column, rows: values.length };
   if (numbers < NEEDED_READINGS) return { code: 'tooFewRows', readings: numbers, needed: NEEDED_READINGS };
-  return constant === null ? null : { code: 'constantColumn', column, value: constant };
+  return constant ? { code: 'constantColumn', column, value: first } : null;
 }
 
 /** A record without time: one reading a row. */
-function numbered(rows: number): { found: GridFound; placement: Placement } {
+function numbered(rows: number): Laid {
   const found: GridFound = { grid: INDEX_GRID, start: 1, places: rows, bad: 0, stamps: rows, exact: true };
-  return {
-    found,
-    placement: placeOnGrid(
-      Float64Array.from({ length: rows }, (_, i) => i + 1),
-      new Float64Array(rows),
-      found,
-    ),
-  };
+  const counts = Float64Array.from({ length: rows }, (_, i) => i + 1);
+  return { found, placement: placeOnGrid(counts, new Float64Array(rows), found), zone: null };
 }
 
-/** Lines where rows are absent: that of the first row behind each of the first stretches without one. */
+/** Places without a row, and the first row behind each of the first stretches of them. */
 function absentPlaces({ owner }: Placement): { count: number; rows: number[] } {
   let count = 0;
   const rows: number[] = [];
@@ -82,6 +84,88 @@ function absentPlaces({ owner }: Placement): { count: number; rows: number[] } {
     if (k + 1 < owner.length && owner[k + 1]! >= 0 && rows.length < 8) rows.push(owner[k + 1]!);
   }
   return { count, rows };
+}
+
+/** The taking of one record, step by step; rows are those of the chosen tag unless they are called rows of the file. */
+class Taking {
+  readonly notes: (ReadingNote | null)[] = [];
+  times: Float64Array | null = null;
+  readonly values: Float64Array;
+  readonly name: string;
+  readonly rows: Int32Array | null;
+  private readonly request: TakeRequest;
+
+  constructor(request: TakeRequest) {
+    const { read, profiles, valueColumn, tag } = request;
+    this.request = request;
+    this.rows = rowsOfTag(read, tag);
+    this.values = gather(columnValues(read, valueColumn), this.rows);
+    this.name = read.tags === null ? profiles[valueColumn]!.name : (read.tagNames[tag] ?? '');
+  }
+
+  fileRow(row: number): number {
+    return this.rows === null ? row : this.rows[row]!;
+  }
+
+  lineOf(row: number): number {
+    return this.request.read.lines[this.fileRow(row)]!;
+  }
+
+  /** Lays the rows on the grid of their stamps, or says why they have none. */
+  lay(): Laid | Failure {
+    const { read, plan } = this.request;
+    if (read.times === null) return notUsable(this.values, this.name) ?? numbered(this.values.length);
+    const time = trueTimes(read, plan.dialect);
+    this.times = time.times;
+    const changes = [...time.clockChanges, ...time.skipped];
+    const fileLines = (rows: readonly number[]) => rows.map((row) => read.lines[row]!);
+    this.notes.push(noteOf('clockChange', changes.length, fileLines(changes)));
+    if (read.dateless * 2 > read.rows) this.notes.push(noteOf('noDate', read.dateless, fileLines([0])));
+    if (read.badStampCount > MOST_BAD_STAMPS * read.rows) return badStamp(read, plan.dialect.timeColumn!);
+    const early = notUsable(this.values, this.name);
+    if (early !== null) return early;
+    const stamps = gather(this.times, this.rows);
+    const found = findGrid(stamps, plan.dialect.stamp !== 'number', this.request.grid);
+    const rows = stamps.length;
+    if (found === null) return { code: 'noRegularAxis', rows, interval: 0, offGrid: rows };
+    const tooLong = checkPlaces(stamps, found);
+    if (tooLong !== null)
+      return { code: 'gridTooLong', places: tooLong.places, limit: tooLong.limit, line: this.lineOf(tooLong.row) };
+    const placement = placeOnGrid(stamps, this.values, found);
+    const { conflictCount, offGridCount } = placement;
+    if (conflictCount > MOST_CONFLICTS * rows) return this.repeated(placement);
+    if (offGridCount > MOST_OFF_GRID * rows)
+      return { code: 'noRegularAxis', rows, interval: found.grid.step, offGrid: offGridCount };
+    this.noteTimes(stamps, found, placement, time.zone);
+    return { found, placement, zone: time.zone };
+  }
+
+  private repeated({ duplicates, conflictCount }: Placement): Failure {
+    const { plan, read } = this.request;
+    const row = this.fileRow(duplicates[0]!);
+    const text = findRows(plan, read, [row])[0]?.cells[plan.dialect.timeColumn!] ?? '';
+    return { code: 'repeatedStamps', line: read.lines[row]!, text, count: conflictCount };
+  }
+
+  private noteTimes(stamps: Float64Array, found: GridFound, placement: Placement, zone: string | null): void {
+    const lines = (list: readonly number[]) => list.map((row) => this.lineOf(row));
+    const absent = absentPlaces(placement);
+    this.notes.push(
+      noteOf('gapsInserted', absent.count, lines(absent.rows)),
+      noteOf('duplicateTimes', placement.duplicateCount, lines(placement.duplicates)),
+      noteOf('reversedTimes', placement.reversedCount, lines(placement.reversed)),
+      noteOf('jitter', placement.jitterCount, [], [placement.jitter.toPrecision(2)]),
+      noteOf('offGrid', placement.offGridCount, lines(placement.offGrid)),
+    );
+    if (zone !== null) return;
+    const turned = clockTurns(stamps, placement, found.grid);
+    this.notes.push(noteOf('clockChange', turned.length, lines(turned)));
+  }
+}
+
+function badStamp(read: RowsRead, column: number): Failure {
+  const { line, cells } = read.badStamps[0]!;
+  return { code: 'badStamp', line, column: column + 1, text: cells[column] ?? '', count: read.badStampCount };
 }
 
 /**
@@ -94,148 +178,31 @@ function absentPlaces({ owner }: Placement): { count: number; rows: number[] } {
  * @returns the record on its grid, or the failure that says why there is none
  */
 export function takeRecord(request: TakeRequest): Taken {
-  const { plan, read, profiles, valueColumn } = request;
-  const profile = profiles[valueColumn]!;
-  const rows = rowsOfTag(read, request.tag);
-  const lineOf = (row: number) => read.lines[rows === null ? row : rows[row]!]!;
-  const fileRow = (row: number) => (rows === null ? row : rows[row]!);
-  const name = read.tags === null ? profile.name : (read.tagNames[request.tag] ?? profile.name);
-  const values = gather(columnValues(read, valueColumn), rows);
-  const notes: (ReadingNote | null)[] = [];
-  const none = { record: null, grid: null, offGrid: [], duplicates: [], reversed: [], times: null };
-  const failed = (failure: Failure, times: Float64Array | null = null): Taken => {
-    return { ...none, failure, times, notes: notes.filter((note) => note !== null) };
+  const taking = new Taking(request);
+  const laid = taking.lay();
+  const { times, name } = taking;
+  const notes = () => taking.notes.filter((note) => note !== null);
+  const failed = (failure: Failure): Taken => {
+    return { record: null, grid: null, offGrid: [], duplicates: [], reversed: [], failure, times, notes: notes() };
   };
-  const early = notUsable(values, name, values.length);
-
-  let times: Float64Array | null = null;
-  let zone: string | null = null;
-  let found: GridFound;
-  let placement: Placement;
-  let calendar = false;
-  if (read.times === null) {
-    if (early !== null) return failed(early);
-    ({ found, placement } = numbered(values.length));
-  } else {
-    const { dialect } = plan;
-    const time = trueTimes(read, dialect);
-    times = time.times;
-    zone = time.zone;
-    calendar = dialect.stamp !== 'number';
-    const stamps = gather(times, rows);
-    notes.push(
-      noteOf(
-        'clockChange',
-        time.clockChanges.length + time.skipped.length,
-        linesOf(read, [...time.clockChanges, ...time.skipped]),
-      ),
-    );
-    if (read.dateless * 2 > read.rows) notes.push(noteOf('noDate', read.dateless, linesOf(read, [0])));
-    if (read.badStampCount > 0.2 * read.rows) return failed(badStamp(read, dialect), times);
-    if (early !== null) return failed(early, times);
-    const grid = findGrid(stamps, calendar, request.grid);
-    if (grid === null)
-      return failed({ code: 'noRegularAxis', rows: stamps.length, interval: 0, offGrid: stamps.length }, times);
-    const tooLong = checkPlaces(stamps, grid);
-    if (tooLong !== null)
-      return failed(
-        { code: 'gridTooLong', places: tooLong.places, limit: tooLong.limit, line: lineOf(tooLong.row) },
-        times,
-      );
-    found = grid;
-    placement = placeOnGrid(stamps, values, grid);
-    const off = placement.offGridCount;
-    if (off > MOST_OFF_GRID * stamps.length)
-      return failed({ code: 'noRegularAxis', rows: stamps.length, interval: grid.grid.step, offGrid: off }, times);
-  }
-
-  const rule = found.grid.rule;
-  const filled = fillGrid(values, placement, rule);
-  const unusable = notUsable(filled, name, filled.length);
-  if (unusable !== null) return failed(unusable, times);
-  const lines = (list: readonly number[]) => list.map(lineOf);
-  const absent = absentPlaces(placement);
-  if (read.times !== null) {
-    notes.push(noteOf('gapsInserted', absent.count, lines(absent.rows)));
-    notes.push(noteOf('duplicateTimes', placement.duplicateCount, lines(placement.duplicates)));
-    notes.push(noteOf('reversedTimes', placement.reversedCount, lines(placement.reversed)));
-    notes.push(noteOf('jitter', placement.jitterCount, [], [placement.jitter.toPrecision(2)]));
-    notes.push(noteOf('offGrid', placement.offGridCount, lines(placement.offGrid)));
-    if (calendar && zone === null) {
-      const turned = clockTurns(gather(times!, rows), placement, found.grid);
-      notes.push(noteOf('clockChange', turned.length, lines(turned)));
-    }
-  }
-  const series = {
-    values: filled,
-    axis: { kind: found.grid.kind, start: found.start, step: found.grid.step, zone },
-    unit: profile.unit,
-    hash: hashValues(filled),
-  };
-  const columns = otherColumns(request, found, placement, rows, times);
+  if ('code' in laid) return failed(laid);
+  const { found, placement, zone } = laid;
+  const values = fillGrid(taking.values, placement, found.grid.rule);
+  const unusable = notUsable(values, name);
+  if (unusable !== null) return failed(unusable);
+  const axis = { kind: found.grid.kind, start: found.start, step: found.grid.step, zone };
+  const unit = request.profiles[request.valueColumn]!.unit;
+  const series = { values, axis, unit, hash: hashValues(values) };
+  const columns = otherColumns(request, found, placement, times);
+  const fileRows = (list: readonly number[]) => list.map((row) => taking.fileRow(row));
   return {
-    record: { series, name, columns, notes: [], rows: values.length },
+    record: { series, name, columns, notes: [], rows: taking.values.length },
     grid: found.grid,
     failure: null,
-    notes: notes.filter((note) => note !== null),
-    offGrid: placement.offGrid.map(fileRow),
-    duplicates: placement.duplicates.map(fileRow),
-    reversed: placement.reversed.map(fileRow),
+    notes: notes(),
+    offGrid: fileRows(placement.offGrid),
+    duplicates: fileRows(placement.duplicates),
+    reversed: fileRows(placement.reversed),
     times,
   };
-}
-
-const linesOf = (read: RowsRead, rows: readonly number[]): number[] =>
-  rows.filter((row) => row < read.rows).map((row) => read.lines[row]!);
-
-function badStamp(read: RowsRead, dialect: RowPlan['dialect']): Failure {
-  const first = read.badStamps[0]!;
-  const column = dialect.timeColumn!;
-  return {
-    code: 'badStamp',
-    line: first.line,
-    column: column + 1,
-    text: first.cells[column] ?? '',
-    count: read.badStampCount,
-  };
-}
-
-/**
- * Rows where a clock without zone was put back by an hour: the stamp falls behind by just that. In hourly records the
- * stamp merely repeats, which counts only in the first hours of a Sunday, when clocks are changed.
- */
-function clockTurns(times: Float64Array, placement: Placement, grid: Grid): number[] {
-  if (grid.kind !== 'seconds' || grid.step > 3600) return [];
-  const back = (row: number) => times[row - 1]! + grid.step - times[row]!;
-  const anHour = (row: number) => row > 0 && Math.abs(back(row) - 3600) < grid.step * 0.5;
-  const onSunday = (row: number) => (Math.floor(times[row]! / 86400) + 4) % 7 === 0 && times[row]! % 86400 <= 3 * 3600;
-  return [...placement.reversed.filter(anHour), ...placement.duplicates.filter((row) => anHour(row) && onSunday(row))];
-}
-
-/** The other numeric columns, or the other tags, on the same grid. */
-function otherColumns(
-  { read, profiles, valueColumn, tag }: TakeRequest,
-  found: GridFound,
-  placement: Placement,
-  rows: Int32Array | null,
-  times: Float64Array | null,
-): Record<string, Float64Array> {
-  const { rule } = found.grid;
-  if (rows !== null && times !== null) {
-    const values = columnValues(read, valueColumn);
-    return Object.fromEntries(
-      read.tagNames.flatMap((name, index) => {
-        const theirs = rowsOfTag(read, index)!;
-        const own = gather(values, theirs);
-        if (index === tag || own.every((value) => Number.isNaN(value))) return [];
-        return [[name, fillGrid(own, placeOnGrid(gather(times, theirs), own, found), rule)]];
-      }),
-    );
-  }
-  const others = profiles.filter(
-    ({ index, role }) => index !== valueColumn && role === 'value' && isNumeric(read.columns[index]!),
-  );
-  return Object.fromEntries(
-    others.map(({ index, name }) => [name, fillGrid(columnValues(read, index), placement, rule)]),
-  );
 }

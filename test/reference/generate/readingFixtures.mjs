@@ -429,6 +429,8 @@ put(
   ]),
 );
 
+put('seconds-cut-off.csv', lines(['time,LH', ...rows(hormone, (k) => at(k, 20).iso)]));
+
 // Several tags
 put(
   'one-row-a-tag.csv',

@@ -124,7 +124,9 @@ describe('checkPlaces', () => {
     const daily = Float64Array.from({ length: 200 }, (_, k) => base + k * 86400);
     expect(checkPlaces(daily, findGrid(daily, true, null)!)).toBeNull();
     daily[57] = utc('2204-06-27T08:00');
-    expect(checkPlaces(daily, findGrid(daily, true, null)!)).toMatchObject({ row: 57, limit: 100_000 });
+    const tooLong = checkPlaces(daily, findGrid(daily, true, null)!)!;
+    expect(tooLong.row).toBe(57);
+    expect(tooLong.limit).toBeLessThan(tooLong.places);
   });
 
   it('lets a pause between two campaigns stand', () => {

@@ -108,4 +108,10 @@ describe('sniffDecimal', () => {
   ] as const)('%j', (cells, decimal, thousands, sure) => {
     expect(sniffDecimal(cells)).toEqual({ decimal, thousands, sure });
   });
+
+  it('finds the thousands mark that goes with a decimal mark the person has fixed', () => {
+    expect(sniffDecimal(['1.250', '12'], ',')).toEqual({ decimal: ',', thousands: '.', sure: true });
+    expect(sniffDecimal(['1,250', '12'], '.')).toEqual({ decimal: '.', thousands: ',', sure: true });
+    expect(sniffDecimal(['7.25', '12'], '.')).toEqual({ decimal: '.', thousands: null, sure: true });
+  });
 });

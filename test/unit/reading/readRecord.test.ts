@@ -31,6 +31,22 @@ describe('settings of the person go before detection', () => {
     expect(record!.dialect.grid).toEqual(grid);
   });
 
+  it('a zone; a name that is no zone is left out', () => {
+    const { axis } = read(csv(), { zone: 'Europe/Berlin' }).record!.series;
+    // 08:00 in Berlin on 13 March 2024 is 07:00 UTC.
+    expect(axis).toEqual({ kind: 'seconds', start: Date.UTC(2024, 2, 13, 7) / 1000, step: 600, zone: 'Europe/Berlin' });
+    expect(read(csv(), { zone: 'Plant/Clock' }).record!.dialect.zone).toBeNull();
+  });
+
+  it('tags without time are numbered, and no other tag is set beside them', () => {
+    const rows = Array.from(hormone, (value, k) => `${stamp(k)},LH,${value}\n${stamp(k)},TI,${k % 3}`);
+    const text = ['time,tag,value', ...rows].join('\n');
+    expect(Object.keys(read(text).record!.columns)).toEqual(['TI']);
+    const { record } = read(text, { timeColumn: null, tagColumn: 1, layout: 'long', tag: 'LH' });
+    expect([...record!.series.values]).toEqual([...hormone]);
+    expect(record!.columns).toEqual({});
+  });
+
   it('a column that is not there is named', () => {
     const { failure, sniffed } = read(csv(), { valueColumn: 7 });
     expect(failure).toEqual({ code: 'noSuchColumn', column: 8, columns: 3 });
@@ -79,6 +95,19 @@ describe('the preview', () => {
       ['room', 'value'],
     ]);
   });
+});
+
+it('an hour that the plant clock had twice is noted where the stamps turn back', () => {
+  const autumn = (k: number) => {
+    const utc = Date.UTC(2024, 9, 26, 22) + k * 600_000;
+    return new Date(utc + (utc >= Date.UTC(2024, 9, 27, 1) ? 1 : 2) * 3_600_000).toISOString().slice(0, 16);
+  };
+  const text = ['time,LH', ...Array.from(hormone, (value, k) => `${autumn(k)},${value}`)].join('\n');
+  const { record } = read(text);
+  const notes = record!.notes.map(({ kind, count, lines }) => ({ kind, count, lines }));
+  expect(notes).toContainEqual({ kind: 'clockChange', count: 1, lines: [20] });
+  expect(notes).toContainEqual(expect.objectContaining({ kind: 'duplicateTimes', count: 6 }));
+  expect(read(text, { zone: 'Europe/Berlin' }).record!.series.values).toHaveLength(48);
 });
 
 it('names that repeat are told apart, and odd ones do no harm', () => {

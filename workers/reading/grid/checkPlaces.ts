@@ -35,8 +35,12 @@ function bulk(sorted: Float64Array): [number, number] {
 export function checkPlaces(times: Float64Array, found: GridFound): TooLong | null {
   const sorted = distinctTimes(times);
   const [low, high] = bulk(sorted);
-  const limit = Math.min(MOST_PLACES, Math.max(FREE_PLACES, PLACES_A_READING * found.stamps));
-  if (found.places <= limit && low === sorted[0] && high === sorted.at(-1)) return null;
+  const most = Math.min(MOST_PLACES, Math.max(FREE_PLACES, PLACES_A_READING * found.stamps));
+  const inOne = low === sorted[0] && high === sorted.at(-1);
+  if (found.places <= most && inOne) return null;
+  // A stamp far off: what the places of the others would allow.
+  const share = (high - low) / (sorted.at(-1)! - sorted[0]!);
+  const limit = inOne ? most : Math.min(most, Math.ceil(FAR * share * found.places));
   const middle = sorted[Math.floor(sorted.length / 2)]!;
   let [row, far] = [0, -1];
   for (let i = 0; i < times.length; i++) {

@@ -13,6 +13,8 @@ export interface Placement {
   readonly reversed: number[];
   readonly offGridCount: number;
   readonly duplicateCount: number;
+  /** Duplicates whose stamp equals that of the row before them while the readings differ. */
+  readonly conflictCount: number;
   readonly reversedCount: number;
   /** Rows that are on the grid though not exactly, and the largest distance as a fraction of the step. */
   readonly jitterCount: number;
@@ -41,7 +43,7 @@ export function placeOnGrid(times: Float64Array, values: Float64Array, found: Gr
   const at = new Int32Array(times.length).fill(-1);
   const owner = new Int32Array(places).fill(-1);
   const [offGrid, duplicates, reversed]: [number[], number[], number[]] = [[], [], []];
-  let [offGridCount, duplicateCount, reversedCount, jitterCount, jitter] = [0, 0, 0, 0, 0];
+  let [offGridCount, duplicateCount, conflictCount, reversedCount, jitterCount, jitter] = [0, 0, 0, 0, 0, 0];
   const keep = (list: number[], row: number) => {
     if (list.length < PLACES_KEPT) list.push(row);
   };
@@ -80,6 +82,7 @@ export function placeOnGrid(times: Float64Array, values: Float64Array, found: Gr
     if (grid.rule === 'nearest') {
       duplicateCount++;
       keep(duplicates, row);
+      if (time === times[held]! && Math.abs(values[row]! - values[held]!) > 0) conflictCount++;
       const [missing, given] = [Number.isNaN(values[held]!), !Number.isNaN(values[row]!)];
       const nearer = off < distance[place]! - ROUNDING && given;
       if ((missing && given) || nearer) {
@@ -91,6 +94,6 @@ export function placeOnGrid(times: Float64Array, values: Float64Array, found: Gr
       keep(duplicates, row);
     } else if (time > times[held]! && !Number.isNaN(values[row]!)) owner[place] = row;
   }
-  const counts = { offGridCount, duplicateCount, reversedCount, jitterCount };
+  const counts = { offGridCount, duplicateCount, conflictCount, reversedCount, jitterCount };
   return { places, at, owner, offGrid, duplicates, reversed, jitter, ...counts };
 }

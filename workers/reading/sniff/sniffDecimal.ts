@@ -35,9 +35,10 @@ function witness(digits: string, mark: '.' | ','): 'decimal' | 'group' | 'either
  * thousand speaks for groups, and the answer is marked as unsure.
  *
  * @param cells cells of the numeric columns, time columns left out
+ * @param settled decimal mark that the person has fixed; then only the thousands mark is found
  * @returns the marks; a point and no groups where no cell has a mark
  */
-export function sniffDecimal(cells: readonly string[]): Marks {
+export function sniffDecimal(cells: readonly string[], settled?: '.' | ','): Marks {
   const count = { point: { decimal: 0, group: 0, either: 0 }, comma: { decimal: 0, group: 0, either: 0 } };
   let [plain, small, space, apostrophe] = [0, 0, 0, 0];
   for (const cell of cells) {
@@ -56,6 +57,10 @@ export function sniffDecimal(cells: readonly string[]): Marks {
     }
   }
   const blanks = space > 0 ? ' ' : apostrophe > 0 ? "'" : null;
+  if (settled !== undefined) {
+    const [mark, other] = settled === '.' ? ([',', count.comma] as const) : (['.', count.point] as const);
+    return { decimal: settled, thousands: other.group + other.either > 0 ? mark : blanks, sure: true };
+  }
   const forPoint = count.point.decimal + count.comma.group;
   const forComma = count.comma.decimal + count.point.group;
   if (forPoint + forComma > 0) {

@@ -2,6 +2,7 @@ import type { Dialect, StampForm } from '../../contract/dialect.ts';
 import type { Question } from '../../contract/reading.ts';
 import { defaultGapWords } from '../cells/gapWords.ts';
 import type { RowPlan } from '../rows/readRows.ts';
+import { isZone } from '../stamps/zoneResolver.ts';
 import { cellClass } from './cellClass.ts';
 import { headingName, type Heading } from './headingName.ts';
 import { headRows, type HeadRow } from './headRows.ts';
@@ -82,11 +83,9 @@ export function sniffDialect(text: string, settings: Partial<Dialect>, more: rea
 
   const numeric = Array.from({ length: columns }, (_, j) => j).filter((j) => j !== settings.timeColumn);
   const cells = numeric.flatMap((j) => columnCells(body, j).filter((cell) => cellClass(cell) === 'number'));
-  const marks = sniffDecimal([...cells, ...more]);
-  const decimal = settings.decimal ?? marks.decimal;
-  const thousandsFits =
-    marks.thousands !== decimal && (settings.decimal === undefined || settings.decimal === marks.decimal);
-  const thousands = settings.thousands === undefined ? (thousandsFits ? marks.thousands : null) : settings.thousands;
+  const marks = sniffDecimal([...cells, ...more], settings.decimal);
+  const { decimal } = marks;
+  const thousands = settings.thousands === undefined ? marks.thousands : settings.thousands;
   const splitGuess = found.guessed || (delimiter === ',' && isSplitDecimal(body));
   if (settings.decimal === undefined && (!marks.sure || splitGuess))
     questions.push({ about: 'decimal', options: decimal === ',' ? [',', '.'] : ['.', ','] });
@@ -122,7 +121,7 @@ export function sniffDialect(text: string, settings: Partial<Dialect>, more: rea
     timeColumn: time.timeColumn,
     clockColumn: time.clockColumn,
     stamp: time.stamp,
-    zone: settings.zone ?? null,
+    zone: settings.zone != null && isZone(settings.zone) ? settings.zone : null,
     status: settings.status ?? null,
     gapWords: settings.gapWords ?? defaultGapWords,
   };

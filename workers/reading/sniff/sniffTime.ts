@@ -14,8 +14,8 @@ export interface TimeFound {
 }
 
 const SAMPLE = 200;
-const counterName =
-  /^(?:t|time|zeit|temps|tiempo|tempo|tijd|elapsed.*|seconds?|secs?|s|min|mins|minutes?|hours?|hrs?|h|days?|n|no\.?|nr\.?|num|number|index|idx|i|sample|reading|obs|observation|row|record|#|id|seq.*|count|cycle|batch|lot|shift|run)?(?:\W.*)?$/iu;
+const timeName =
+  /^(?:t|time|zeit|temps|tiempo|tempo|tijd|elapsed.*|seconds?|secs?|s|min|mins|minutes?|hours?|hrs?|h|days?)(?:\W.*)?$/iu;
 
 /** Cells of a column as a sample, blanks left out. */
 export function columnCells(body: readonly HeadRow[], column: number): string[] {
@@ -28,13 +28,13 @@ export function columnCells(body: readonly HeadRow[], column: number): string[] 
   return cells;
 }
 
-/** A plain count or elapsed time: strictly ascending, and evenly so unless its name says what it is. */
+/** A plain count or elapsed time: strictly ascending, and evenly so unless its name says that it is a time. */
 function isCounter(cells: readonly string[], name: string, decimal: '.' | ','): boolean {
   const values = cells.map((cell) => parseNumber(cell, decimal, null));
   if (values.length < 3 || values.some((value) => Number.isNaN(value))) return false;
   const differences = values.slice(1).map((value, i) => value - values[i]!);
   if (!differences.every((difference) => difference > 0)) return false;
-  if (name.trim() !== '' && counterName.test(name.trim())) return true;
+  if (timeName.test(name.trim())) return true;
   const step = differences.toSorted((a, b) => a - b)[Math.floor(differences.length / 2)]!;
   const even = differences.filter((difference) => Math.abs(difference - step) < 1e-6 * step).length;
   return even >= 0.95 * differences.length;

@@ -1,6 +1,6 @@
 import type { Dialect } from '../../contract/dialect.ts';
 import { noOffset, type RowsRead } from '../rows/readRows.ts';
-import { isZone, resolveZone } from './zoneResolver.ts';
+import { resolveZone } from './zoneResolver.ts';
 
 /** Stamps as the axis counts them, with its zone, and rows where the clock was changed. */
 export interface TrueTimes {
@@ -30,12 +30,12 @@ function countDays(clock: Float64Array): Float64Array {
  * with changing offsets they become true instants in UTC; without offsets they are the plant clock, unless a zone with its
  * clock changes is given. Epoch counts are instants already. Times of day alone are counted on over midnight.
  *
- * @param read rows with stamps; @param dialect form and zone
+ * @param read rows with stamps; @param dialect form, and zone (a name the platform knows)
  * @returns times by row, the zone of the axis, and rows next to clock changes
  */
 export function trueTimes(read: RowsRead, dialect: Pick<Dialect, 'stamp' | 'zone'>): TrueTimes {
   const times = read.times ?? new Float64Array(0);
-  const zone = dialect.zone !== null && isZone(dialect.zone) ? dialect.zone : null;
+  const { zone } = dialect;
   const plain = { times, zone: null, clockChanges: [], skipped: [] };
   if (dialect.stamp === 'number' || dialect.stamp === null) return plain;
   if (dialect.stamp.startsWith('epoch')) return { ...plain, zone: zone ?? 'UTC' };
