@@ -50,11 +50,14 @@ const START_MARGIN = 5e-4;
 const PATIENCE = 20;
 const AR_CIRCLE = 0.02;
 /**
- * From this iteration on, a climb this far below the best is given up, and ever nearer ones as it goes on: only maxima
- * within 2 of the best are of interest, and a quasi-Newton climb has most of its gain behind it by then.
+ * From iteration EARLY on, a climb FAR_BELOW/(iteration − EARLY + 1)² below the best is given up: only maxima within 2 of
+ * the best are of interest, and a quasi-Newton climb has most of its gain behind it by then.
  */
-const EARLY = 6;
-const FAR_BELOW = 60;
+const EARLY = 3;
+const FAR_BELOW = 400;
+/** A climb that gains less than DULL_GAIN over DULL_STRETCH iterations walks along a ridge that has no end. */
+const DULL_STRETCH = 8;
+const DULL_GAIN = 1e-4;
 /** A Fisher-transformed partial beyond this is on the circle to ten digits. */
 const FARTHEST = 12;
 
@@ -71,21 +74,27 @@ export function climb(terrain: Terrain, from: Float64Array, held: Int8Array, opt
   const slope = climbSlope(terrain, held, options.fenced === true);
   const start = Float64Array.from(free, (i) => toSearch(terrain.space, i, from[i]!, START_MARGIN));
   let hopeless = false;
+  let dull = false;
+  const history: number[] = [];
   const end = minimise(slope.objective, start, {
     inverseHessian: firstInverse(terrain, free, slope.coordinates(start)) ?? 1 / terrain.readings,
     decrease: options.gain,
     maximumIterations: options.maximumIterations,
     longestStep: 1.5,
     abandon: (u, iterations, value) => {
-      hopeless = iterations >= EARLY && -value < (options.best ?? -Infinity) - FAR_BELOW / (iterations - EARLY + 1);
-      return hopeless || (iterations >= PATIENCE && nearCircle(terrain, free, u));
+      const late = iterations - EARLY + 1;
+      hopeless = late > 0 && -value < (options.best ?? -Infinity) - FAR_BELOW / late ** 2;
+      history.push(value);
+      dull = history.length > DULL_STRETCH && history[iterations - 1 - DULL_STRETCH]! - value < DULL_GAIN;
+      return hopeless || dull || (iterations >= PATIENCE && nearCircle(terrain, free, u));
     },
   });
   return {
     x: slope.coordinates(end.at),
     held,
     logLikelihood: -end.value,
-    status: end.status,
+    // On a ridge every point is as good as its neighbour; running to the circle is another matter.
+    status: dull && !nearCircle(terrain, free, end.at) ? 'iterationLimit' : end.status,
     gradientNorm: end.gradientNorm,
     inverseHessian: end.inverseHessian,
     iterations: end.iterations,

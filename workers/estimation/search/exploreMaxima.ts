@@ -16,7 +16,7 @@ const FINISHED_PURE = 2;
 const TRIED_FACE = 6;
 const FINISHED_FACE = 3;
 /** Starts the quick answer climbs from, one after the other, until an end is admissible. */
-const QUICK = 4;
+const QUICK = 3;
 /** Cosines of the angles that a pair of MA roots on the circle is tried at. */
 const ANGLES = Array.from({ length: 24 }, (_, i) => Math.cos((Math.PI * (i + 0.5)) / 24));
 
@@ -38,7 +38,7 @@ export function climbFromBest(
   starts: readonly Float64Array[],
   given: readonly Float64Array[],
 ): Exploration {
-  const survey = new Survey(terrain);
+  const survey = new Survey(terrain, true);
   const ranked = survey.screen([...starts, ...given].map(interior));
   for (const trial of ranked.slice(0, QUICK)) {
     survey.finish(trial);

@@ -24,7 +24,11 @@ export interface Exploration {
   readonly evaluations: number;
 }
 
-const OPTIONS: ClimbOptions = { maximumIterations: 120, gain: 1e-8 };
+const OPTIONS: ClimbOptions = { maximumIterations: 80, gain: 1e-8 };
+/** Evaluations after which no new climb is begun: fewer for a long record, whose likelihood has fewer maxima. */
+const BUDGET = { most: 3000, least: 400, readings: 3e6 };
+/** Iterations of a climb for the quick answer. */
+const HASTY = 40;
 /** Iterations of a try: most of a climb's gain is in them. */
 const TRY = 6;
 /** Starts, and ends of tries, closer than this in every coordinate are one. */
@@ -33,7 +37,7 @@ const APART_TRIES = 0.03;
 /** Rounding of ln L that is not called lower. */
 const LEVEL = 1e-9;
 /** Starts climbed from within the admissible set where all else left it. */
-const FENCED = 5;
+const FENCED = 3;
 
 /** Keeps the maxima met so far and counts the work. */
 export class Survey {
@@ -43,8 +47,14 @@ export class Survey {
   private iterations = 0;
   private evaluations = 0;
 
-  constructor(terrain: Terrain) {
+  private readonly budget: number;
+  private readonly options: ClimbOptions;
+
+  /** @param hasty keeps every climb short, for the quick answer */
+  constructor(terrain: Terrain, hasty = false) {
     this.terrain = terrain;
+    this.options = hasty ? { ...OPTIONS, maximumIterations: HASTY } : OPTIONS;
+    this.budget = Math.max(BUDGET.least, Math.min(BUDGET.most, BUDGET.readings / terrain.readings));
   }
 
   /** Points inside the space, highest first. */
@@ -59,6 +69,7 @@ export class Survey {
 
   /** Tries the first `tried` of a ranked list by a few iterations and climbs to the end from the best of them. */
   explore(ranked: readonly Trial[], tried: number, finished: number): void {
+    if (this.evaluations > this.budget) return;
     const best = this.best();
     const ends = spread(ranked, tried, APART_STARTS)
       .map(({ x, held }) => climb(this.terrain, x, held, { ...OPTIONS, maximumIterations: TRY, best }))
@@ -66,13 +77,13 @@ export class Survey {
       .sort((one, other) => other.logLikelihood - one.logLikelihood);
     for (const end of ends) this.count(end);
     this.starts += ends.length;
-    for (const end of spread(ends, finished, APART_TRIES)) this.finish(end);
+    for (const end of spread(ends, finished, APART_TRIES)) if (this.evaluations <= this.budget) this.finish(end);
   }
 
   /** Climbs to the end, onto the unit circle where it leads there. */
   finish({ x, held }: Trial): void {
-    const end = climb(this.terrain, x, held, { ...OPTIONS, best: this.best() });
-    this.add(end.hopeless ? end : settleOnFace(this.terrain, end, OPTIONS));
+    const end = climb(this.terrain, x, held, { ...this.options, best: this.best() });
+    this.add(end.hopeless ? end : settleOnFace(this.terrain, end, this.options));
   }
 
   hasAdmissible(): boolean {
@@ -95,11 +106,11 @@ export class Survey {
     const height = heightOf(this.terrain);
     for (const { x, held } of given) {
       if (this.best() >= height(x) - LEVEL) continue;
-      this.add(climb(this.terrain, x, held, { ...OPTIONS, fenced: true }));
+      this.add(climb(this.terrain, x, held, { ...this.options, fenced: true }));
     }
     for (const { x, held } of trials.slice(0, FENCED)) {
       if (this.hasAdmissible()) break;
-      this.add(climb(this.terrain, x, held, { ...OPTIONS, fenced: true }));
+      this.add(climb(this.terrain, x, held, { ...this.options, fenced: true }));
     }
     return { summits: this.ranked(), starts: this.starts, iterations: this.iterations, evaluations: this.evaluations };
   }
