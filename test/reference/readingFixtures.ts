@@ -87,6 +87,7 @@ export const readings: readonly Reading[] = [
   usual('inch-mark-inside.csv'),
   usual('open-quote.csv', { settings: { quote: null } }),
   usual('values-only.txt', { axis: numbered(), name: 'column 1' }),
+  usual('values-with-a-sum.txt', { axis: numbered(), name: 'column 1', notes: { textCells: 1 } }),
   usual('values-only-decimal-comma.txt', { axis: numbered(), detected: { decimal: ',' } }),
   usual('blank-line-for-a-gap.txt', { axis: numbered(), values: without(hormone, 9), notes: { gapCells: 1 } }),
   ...[
@@ -143,6 +144,8 @@ export const readings: readonly Reading[] = [
   usual('month-by-name.csv', { detected: { stamp: 'dayFirst' } }),
   usual('month-by-german-name.csv'),
   usual('twelve-hour-clock.csv', { detected: { stamp: 'monthFirst' } }),
+  usual('blanks-around-am-and-pm.txt', { axis: seconds('2024-03-13T08:00', 3600), detected: { clockColumn: 1 } }),
+  usual('fifty-readings-a-second.csv', { axis: seconds('2024-03-13T08:00', 0.02, 'UTC') }),
   usual('date-and-time-apart.csv', { detected: { timeColumn: 0, clockColumn: 1 } }),
   usual('time-before-date.csv', { detected: { timeColumn: 1, clockColumn: 0 } }),
   usual('points-in-the-time.csv'),

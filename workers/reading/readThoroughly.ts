@@ -74,7 +74,7 @@ export function readThoroughly(
   };
   if (settings.decimal === undefined) {
     const odd = read.columns
-      .filter(({ numbers, texts }) => numbers > 0 && texts > ODD_SHARE * numbers)
+      .filter(({ numbers, texts }) => texts > ODD_SHARE * numbers)
       .flatMap(({ oddTexts }) => oddTexts);
     const { decimal, thousands } = found.plan.dialect;
     const renewed = odd.length > 0 ? sniffDialect(text, settings, odd).plan.dialect : null;

@@ -10,7 +10,7 @@ import { placeOnGrid, type Placement } from './grid/placeOnGrid.ts';
 import { noteOf } from './noteBook.ts';
 import { otherColumns } from './otherColumns.ts';
 import { findRows } from './rows/findRows.ts';
-import type { RowPlan, RowsRead } from './rows/readRows.ts';
+import { rowShape, type RowPlan, type RowsRead } from './rows/readRows.ts';
 import { columnValues, gather, rowsOfTag } from './selectRows.ts';
 import { trueTimes } from './stamps/trueTimes.ts';
 
@@ -114,7 +114,7 @@ class Taking {
   /** Lays the rows on the grid of their stamps, or says why they have none. */
   lay(): Laid | Failure {
     const { read, plan } = this.request;
-    if (read.times === null) return notUsable(this.values, this.name) ?? numbered(this.values.length);
+    if (read.times === null) return notUsable(this.values, this.name) ?? numbered(this.rowsBeforeFooter());
     const time = trueTimes(read, plan.dialect);
     this.times = time.times;
     const changes = [...time.clockChanges, ...time.skipped];
@@ -138,6 +138,16 @@ class Taking {
       return { code: 'noRegularAxis', rows, interval: found.grid.step, offGrid: offGridCount };
     this.noteTimes(stamps, found, placement, time.zone);
     return { found, placement, zone: time.zone };
+  }
+
+  /** In a record without time, words or torn rows behind the last reading (sums, remarks) are no places. */
+  private rowsBeforeFooter(): number {
+    const { read, valueColumn } = this.request;
+    const odd = new Set(read.columns[valueColumn]!.oddRows);
+    const isFooter = (row: number) => odd.has(row) || read.shapes[row] === rowShape.long;
+    let rows = this.values.length;
+    while (rows > 0 && Number.isNaN(this.values[rows - 1]!) && isFooter(this.fileRow(rows - 1))) rows--;
+    return rows;
   }
 
   private repeated({ duplicates, conflictCount }: Placement): Failure {

@@ -118,6 +118,7 @@ put(
 );
 
 // Numbers
+put('values-with-a-sum.txt', lines([...hormone.map(dot), 'Sum 51.3']));
 put('values-only.txt', lines(hormone.map(dot)));
 put('values-only-decimal-comma.txt', lines(['LH', ...hormone.map(comma)]));
 put('blank-line-for-a-gap.txt', lines(['LH', ...hormone.map((v, k) => (k === 9 ? '' : dot(v))), '', '']));
@@ -430,6 +431,21 @@ put(
 );
 
 put('seconds-cut-off.csv', lines(['time,LH', ...rows(hormone, (k) => at(k, 20).iso)]));
+
+put(
+  'blanks-around-am-and-pm.txt',
+  lines([
+    'Date Time LH',
+    ...hormone.map((v, k) => {
+      const t = at(k, 3600);
+      return `${t.m}/${t.d}/${t.y} ${((t.h + 11) % 12) + 1}:00 ${t.h < 12 ? 'AM' : 'PM'} ${dot(v)}`;
+    }),
+  ]),
+);
+put(
+  'fifty-readings-a-second.csv',
+  lines(['time,LH', ...hormone.map((v, k) => `${new Date(start + 20 * k).toISOString()},${dot(v)}`)]),
+);
 
 // Several tags
 put(

@@ -150,7 +150,7 @@ export function findStep(times: Float64Array, calendar: boolean, fixed?: number)
   for (const step of candidates) {
     if (!(step > 0)) continue;
     const found = judge(times, step, calendar);
-    const exact = found.distance < EXACT;
+    const exact = found.distance < Math.max(EXACT, (4 * Number.EPSILON * Math.abs(times[0]!)) / step);
     const odd = calendar && !exact && !niceSeconds.includes(step) ? ODD_COST : 0;
     const gaps = GAP_COST * Math.max(0, 1 - times.length / found.places);
     const cost = found.bad / times.length + gaps + DISTANCE_COST * (exact ? 0 : found.distance) + odd;

@@ -49,6 +49,8 @@ export function placeOnGrid(times: Float64Array, values: Float64Array, found: Gr
   };
   const turnsOf = (time: number) => ((grid.kind === 'months' ? monthOf(time) : time) - start) / grid.step;
   const distance = new Float32Array(grid.rule === 'nearest' ? places : 0);
+  // Seconds since 1970 have steps of a quarter of a microsecond as doubles.
+  const rounding = Math.max(ROUNDING, grid.kind === 'seconds' ? (4 * Number.EPSILON * Math.abs(start)) / grid.step : 0);
   let before = -Infinity;
   for (let row = 0; row < times.length; row++) {
     const time = times[row]!;
@@ -60,8 +62,8 @@ export function placeOnGrid(times: Float64Array, values: Float64Array, found: Gr
     before = time;
     const turns = turnsOf(time);
     let place = Math.round(turns);
-    if (grid.rule === 'binMean') place = Math.floor(turns + ROUNDING);
-    else if (grid.rule === 'last') place = Math.ceil(turns - ROUNDING);
+    if (grid.rule === 'binMean') place = Math.floor(turns + rounding);
+    else if (grid.rule === 'last') place = Math.ceil(turns - rounding);
     const off = Math.abs(turns - place);
     if (place < 0 || place >= places || (grid.rule === 'nearest' && off > grid.tolerance)) {
       offGridCount++;
@@ -69,7 +71,7 @@ export function placeOnGrid(times: Float64Array, values: Float64Array, found: Gr
       continue;
     }
     at[row] = place;
-    if (grid.rule === 'nearest' && off > ROUNDING) {
+    if (grid.rule === 'nearest' && off > rounding) {
       jitterCount++;
       if (off > jitter) jitter = off;
     }
@@ -84,7 +86,7 @@ export function placeOnGrid(times: Float64Array, values: Float64Array, found: Gr
       keep(duplicates, row);
       if (time === times[held]! && Math.abs(values[row]! - values[held]!) > 0) conflictCount++;
       const [missing, given] = [Number.isNaN(values[held]!), !Number.isNaN(values[row]!)];
-      const nearer = off < distance[place]! - ROUNDING && given;
+      const nearer = off < distance[place]! - rounding && given;
       if ((missing && given) || nearer) {
         owner[place] = row;
         distance[place] = off;

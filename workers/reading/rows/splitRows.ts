@@ -33,11 +33,19 @@ function lineBreaks(cells: readonly string[]): number {
   return count;
 }
 
-/** Runs of blanks count as one delimiter, and blanks at the ends of a line as none. */
-const squeeze = (cells: string[]): string[] => {
-  const kept = cells.filter((cell) => cell !== '' && cell !== '\r');
+const half = /^[ap]\.?m\.?$/iu;
+
+/** Runs of blanks count as one delimiter, and blanks at the ends of a line as none; AM and PM stay with their clock. */
+function squeeze(cells: readonly string[]): string[] {
+  const kept: string[] = [];
+  for (const cell of cells) {
+    if (cell === '' || cell === '\r') continue;
+    const before = kept.at(-1);
+    if (before !== undefined && half.test(cell) && before.includes(':')) kept[kept.length - 1] = `${before} ${cell}`;
+    else kept.push(cell);
+  }
   return kept.length === 0 ? [''] : kept;
-};
+}
 
 /**
  * The rows of a delimited text, one after the other (RFC 4180, with any of the dialects' delimiters).

@@ -3,6 +3,8 @@ import type { HeadRow } from './headRows.ts';
 const MOST_TAGS = 200;
 /** Share of rows that repeat a stamp from which on a file is taken to list several tags. */
 const REPEATS = 0.25;
+/** The half of the day, apart from its clock, is no tag. */
+const half = /^[ap]\.?\s?m\.?$/iu;
 
 /**
  * The column that names the tag in a file of rows (time, tag, value).
@@ -23,6 +25,7 @@ export function sniffTags(
   for (const column of wordColumns) {
     const words = rows.map(({ cells }) => cells[column]?.trim() ?? '');
     const distinct = new Set(words).size;
+    if (words.every((word) => half.test(word))) continue;
     if (distinct < 2 || distinct > MOST_TAGS || distinct * 2 > rows.length) continue;
     const pairs = new Set(words.map((word, i) => `${times[i]!}\u0000${word}`)).size;
     if (pairs > 0.9 * rows.length) return column;
