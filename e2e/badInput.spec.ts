@@ -25,7 +25,7 @@ for (const { name, text, says } of cases) {
     const table = page.getByRole('table', { name: 'Candidates' });
     await expect(table.getByText(/fitted/i)).toHaveCount(3);
     await dropFile(page, name, text);
-    await expect(page.getByText(says).first()).toBeVisible();
+    await expect(page.locator('.notice').getByText(says).first()).toBeVisible();
     await expect(table.getByText(/fitted/i)).toHaveCount(3);
   });
 }
@@ -34,7 +34,7 @@ test('a damaged or foreign link leaves a working page and says so', async ({ pag
   for (const hash of ['#s1.AAAA_not-a-session', '#section-3', '#s1.' + 'x'.repeat(5000)]) {
     await page.goto('about:blank');
     await page.goto(`/${hash}`);
-    await expect(page.getByText(/link/i).first()).toBeVisible();
+    await expect(page.locator('.notices').getByText(/link/i).first()).toBeVisible();
     await expect(page.getByRole('button', { name: 'Open record' })).toBeEnabled();
   }
 });

@@ -1,4 +1,4 @@
-import { useEffect, useState, type DragEvent } from 'react';
+import { useEffect, useState } from 'react';
 import { ArrivalSheet } from './panels/arrival/ArrivalSheet.tsx';
 import { CandidateTable } from './panels/candidates/CandidateTable.tsx';
 import { DossierBar } from './panels/dossier/DossierBar.tsx';
@@ -33,29 +33,35 @@ export function App() {
     return () => removeEventListener('keydown', onKey);
   }, [actions]);
 
-  const onDrop = (event: DragEvent) => {
-    event.preventDefault();
-    setOver(false);
-    const [file] = event.dataTransfer.files;
-    if (file !== undefined) void actions.openFile(file);
-    else {
-      const text = event.dataTransfer.getData('text/plain');
-      if (text !== '') void actions.openText(text, 'dropped text');
-    }
-  };
+  // The whole window takes a drop: beside the sheet the browser would leave the page for the file.
+  useEffect(() => {
+    const enter = (event: DragEvent) => {
+      event.preventDefault();
+      setOver(true);
+    };
+    const leave = (event: DragEvent) => {
+      if (event.relatedTarget === null) setOver(false);
+    };
+    const drop = (event: DragEvent) => {
+      event.preventDefault();
+      setOver(false);
+      const file = event.dataTransfer?.files[0];
+      const text = event.dataTransfer?.getData('text/plain') ?? '';
+      if (file !== undefined) void actions.openFile(file);
+      else if (text !== '') void actions.openText(text, 'dropped text');
+    };
+    addEventListener('dragover', enter);
+    addEventListener('dragleave', leave);
+    addEventListener('drop', drop);
+    return () => {
+      removeEventListener('dragover', enter);
+      removeEventListener('dragleave', leave);
+      removeEventListener('drop', drop);
+    };
+  }, [actions]);
 
   return (
-    <div
-      className={over ? 'page taking' : 'page'}
-      onDragOver={(event) => {
-        event.preventDefault();
-        setOver(true);
-      }}
-      onDragLeave={(event) => {
-        if (event.relatedTarget === null) setOver(false);
-      }}
-      onDrop={onDrop}
-    >
+    <div className={over ? 'page taking' : 'page'}>
       <a className="skip" href="#candidates">
         To the candidates
       </a>

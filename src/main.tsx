@@ -23,7 +23,10 @@ createRoot(root).render(
   </AppContext>,
 );
 
-void openSession(store, actions, links, savedSession, location.hash);
+/** The link has been opened; from here on the browser's own store keeps the session, and a reload must not go back to the link. */
+const forgetHash = () => history.replaceState(null, '', location.pathname + location.search);
+
+void openSession(store, actions, links, savedSession, location.hash).then(forgetHash);
 addEventListener('hashchange', () => {
-  if (location.hash.length > 1) void links.openHash(location.hash);
+  if (location.hash.length > 1) void links.openHash(location.hash).then(forgetHash);
 });

@@ -267,7 +267,7 @@ function readingText(failure: ReadingFailure): FailureText {
       return say(
         `No regular interval fits the times: ${failure.offGrid} of ${failure.rows} rows are off a grid of ${formatNumber(failure.interval, 5)} s.`,
         '',
-        'Choose a grid below (nearest, mean of bin, last value), or no time.',
+        'Choose another time column, or no time: the readings are then numbered.',
       );
     case 'gridTooLong':
       return say(

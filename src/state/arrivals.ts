@@ -63,7 +63,8 @@ export function createArrivals(
   const take = (arrival: Arrival, record: ReadRecord, example: boolean) => {
     const waiting = wanted();
     const same = waiting !== null && waiting.seriesHash === record.series.hash;
-    if (waiting === null) history.remember();
+    // What the page opens with is where undo ends.
+    if (waiting === null && !store.get().opening) history.remember();
     newest += 1;
     store.set((state) => ({
       ...(same ? filled(state, waiting, arrival, record, example) : replaced(state, arrival, record, example)),

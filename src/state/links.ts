@@ -36,7 +36,7 @@ export function createLinks(store: Store, platform: Platform, arrivals: Arrivals
     }
     const { envelope, inline } = decoded.value;
     jobs.cancel();
-    history.remember();
+    if (!store.get().opening) history.remember();
     store.set((state) => ({
       ...state,
       records: recordsOf(envelope),

@@ -61,7 +61,7 @@ export function DialectControls({ sniffed }: { readonly sniffed: Sniffed }) {
           ['.', 'point'],
           [',', 'comma'],
         ]}
-        onChange={(value) => change({ decimal: value as Dialect['decimal'], thousands: null })}
+        onChange={(value) => change({ decimal: value as Dialect['decimal'] })}
       />
       <Choice
         label="Quotes"
