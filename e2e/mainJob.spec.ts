@@ -19,6 +19,7 @@ async function allFitted(page: Page, count: number): Promise<void> {
 }
 
 async function takeHormone(page: Page): Promise<void> {
+  await allFitted(page, 3); // the example the page opens with
   await dropFile(page, 'hormone.csv', hormoneCsv());
   await expect(page.getByRole('button', { name: 'Use this record' })).toBeEnabled();
   await page.getByRole('button', { name: 'Use this record' }).click();
