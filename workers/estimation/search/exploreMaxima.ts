@@ -13,7 +13,7 @@ const FINISHED = 5;
 const TRIED_PURE = 4;
 const FINISHED_PURE = 2;
 /** The same for each face of the MA set. */
-const TRIED_FACE = 6;
+const TRIED_FACE = 8;
 const FINISHED_FACE = 3;
 /** Starts the quick answer climbs from, one after the other, until an end is admissible. */
 const QUICK = 3;
@@ -99,7 +99,9 @@ function faceTrials({ space, readings }: Terrain, x: Float64Array, coordinate: n
   if (!space.isPairFace(coordinate)) return [{ x: moved, held }];
   const here = Math.acos(Math.max(-1, Math.min(1, x[coordinate - 1]!)));
   const beside = [-4, -2, 2, 4].map((steps) => Math.cos(here + (steps * Math.PI) / readings));
-  const turned = [...ANGLES, ...beside].map((cosine) => {
+  // Pairs at a few steps from a root at 1 or −1 act on the slowest (fastest) movement the record can show.
+  const slow = [1, 2, 4].map((steps) => Math.cos((steps * Math.PI) / readings));
+  const turned = [...ANGLES, ...beside, ...slow, ...slow.map((cosine) => -cosine)].map((cosine) => {
     const other = moved.slice();
     other[coordinate - 1] = cosine;
     return { x: other, held };

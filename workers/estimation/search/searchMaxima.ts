@@ -2,9 +2,10 @@ import type { Candidate, FitRequest, Parameters } from '../../contract/candidate
 import { createRandom } from '../../numeric/random.ts';
 import { oscillationStarts } from '../starts/oscillationStarts.ts';
 import { startingPoints, withCancellingPair } from '../starts/startingPoints.ts';
+import { isAdmissible } from './admissibility.ts';
 import type { Terrain } from './climb.ts';
 import { climbFromBest, exploreMaxima } from './exploreMaxima.ts';
-import type { Exploration } from './survey.ts';
+import type { Exploration, Summit } from './survey.ts';
 import { polish } from './polish.ts';
 
 /** Maxima this far below the best in ln L are reported with it. */
@@ -47,21 +48,28 @@ function ridges({ space }: Terrain, candidate: Candidate, given: readonly Parame
 }
 
 function withPolish(terrain: Terrain, found: Exploration): Exploration {
-  const best = found.summits.find(({ admissible }) => admissible) ?? found.summits[0];
-  if (best === undefined) return found;
-  const top = best.landing.logLikelihood;
+  const { space, season } = terrain;
+  const highest = (summits: readonly Summit[]) =>
+    summits.reduce(
+      (most, { landing, admissible }) => (admissible ? Math.max(most, landing.logLikelihood) : most),
+      -Infinity,
+    );
+  const before = highest(found.summits);
   let evaluations = found.evaluations;
   const polished = found.summits
-    .filter(({ landing, admissible }) => admissible && landing.logLikelihood >= top - WITHIN)
+    .filter(({ landing, admissible }) => admissible && landing.logLikelihood >= before - WITHIN)
     .map((summit) => {
       const landing = polish(terrain, summit.landing);
       evaluations += landing.evaluations - summit.landing.evaluations;
-      return { ...summit, landing };
+      // A climb that had not ended may still move far, even out of the admissible set: then it stays as it was.
+      return space.place(landing.x) && isAdmissible(space.coefficients, season) ? { ...summit, landing } : summit;
     });
+  const top = highest(polished);
   // Climbs towards a spurious pair end where they are given up, at no definite place: the highest stands for them.
   const excluded = found.summits.filter(({ landing, admissible }) => !admissible && landing.logLikelihood > top);
   const reached = excluded.reduce((sum, summit) => sum + summit.reached, 0);
-  const summits = [...excluded.slice(0, 1).map((summit) => ({ ...summit, reached })), ...polished].sort(
+  const within = polished.filter(({ landing }) => landing.logLikelihood >= top - WITHIN);
+  const summits = [...excluded.slice(0, 1).map((summit) => ({ ...summit, reached })), ...within].sort(
     (one, other) => other.landing.logLikelihood - one.landing.logLikelihood,
   );
   return { ...found, summits, evaluations };

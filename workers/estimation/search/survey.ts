@@ -134,11 +134,10 @@ export class Survey {
     this.starts++;
     this.count(landing);
     if (landing.hopeless || !Number.isFinite(landing.logLikelihood)) return;
-    const height = heightOf(this.terrain);
     // Climbs given up on the way to the circle have no end of their own: they count as one.
     const lost = landing.status === 'abandoned';
     const known = this.found.find((other) =>
-      lost ? other.landing.status === 'abandoned' : samePlace(height, other.landing, landing),
+      lost ? other.landing.status === 'abandoned' : samePlace(this.terrain, other.landing, landing),
     );
     if (known !== undefined) {
       known.reached++;
@@ -161,8 +160,7 @@ export class Survey {
     const inside = landing.x.map((x, i) => (landing.held[i] === 0 ? x : 0.98 * x));
     const end = climb(this.terrain, inside, free, OPTIONS);
     this.count(end);
-    const height = heightOf(this.terrain);
-    const known = this.found.some((other) => samePlace(height, other.landing, end));
+    const known = this.found.some((other) => samePlace(this.terrain, other.landing, end));
     return known || !(end.logLikelihood >= landing.logLikelihood) ? null : end;
   }
 }

@@ -11,6 +11,8 @@ const SMOOTHED = 2;
 /** Moduli of the AR and MA pair: an AR pair nearer to the circle makes a peak, an MA pair a trough. */
 const PEAK = { ar: 0.97, ma: 0.88 };
 const TROUGH = { ar: 0.88, ma: 0.97 };
+/** The same at the two ends of the spectrum, where a trough is that of a difference too many. */
+const EDGE = { ar: 0.93, ma: 0.995 };
 
 /**
  * Starts with an AR and an MA pair of roots at one angle. The likelihood of a model with both has a maximum near each
@@ -33,8 +35,9 @@ export function oscillationStarts(space: SearchSpace, candidate: Candidate, cent
   const { ar, ma, seasonalAr, seasonalMa } = rest.coefficients;
   const innovations = filtered(centred.subarray(0, MOST_READINGS), ar, ma);
   const power = periodogram(innovations);
-  const withPair = (index: number, { ar: arModulus, ma: maModulus }: typeof PEAK) => {
-    const cosine = Math.cos((2 * Math.PI * (index + 1)) / innovations.length);
+  const angleOf = (index: number) => (2 * Math.PI * (index + 1)) / innovations.length;
+  const withPair = (angle: number, { ar: arModulus, ma: maModulus }: typeof PEAK) => {
+    const cosine = Math.cos(angle);
     return space.locate({
       ar: timesPair(ar, cosine, arModulus, -1),
       ma: timesPair(ma, cosine, maModulus, 1),
@@ -47,8 +50,10 @@ export function oscillationStarts(space: SearchSpace, candidate: Candidate, cent
     return -near.reduce((sum, value) => sum + value, 0) / near.length;
   });
   return [
-    ...summits(power).map((index) => withPair(index, PEAK)),
-    ...summits(smoothed).map((index) => withPair(index, TROUGH)),
+    ...summits(power).map((index) => withPair(angleOf(index), PEAK)),
+    ...summits(smoothed).map((index) => withPair(angleOf(index), TROUGH)),
+    withPair(angleOf(0), EDGE),
+    withPair(Math.PI - angleOf(0), EDGE),
   ];
 }
 
