@@ -18,6 +18,12 @@ async function allFitted(page: Page, count: number): Promise<void> {
   }
 }
 
+/** The text of a row once all its numbers are there. */
+async function settled(row: Locator): Promise<string> {
+  await expect(row).not.toContainText('–');
+  return row.innerText();
+}
+
 async function takeHormone(page: Page): Promise<void> {
   await allFitted(page, 3); // the example the page opens with
   await dropFile(page, 'hormone.csv', hormoneCsv());
@@ -60,8 +66,8 @@ test('the whole job: drop, fit, toggle, sort, link, dossier', async ({ page, bro
   // The level switch refits its row only.
   const named = (orders: string) => rows(page).filter({ hasText: orders });
   const first = named('(1,0,0)');
-  const before = await first.innerText();
-  const other1 = await named('(0,1,1)').innerText();
+  const before = await settled(first);
+  const other1 = await settled(named('(0,1,1)'));
   await first.getByRole('radio', { name: 'none' }).check();
   await expect
     .poll(async () => /fitted/.test(await first.innerText()) && (await first.innerText()) !== before)
@@ -125,7 +131,7 @@ test('undo takes back the level, the record and comes again with redo', async ({
   await page.goto('/');
   await takeHormone(page);
   const row = rows(page).filter({ hasText: '(1,0,0)' });
-  const before = await row.innerText();
+  const before = await settled(row);
   await row.getByRole('radio', { name: 'none' }).check();
   await expect.poll(async () => /fitted/.test(await row.innerText()) && (await row.innerText()) !== before).toBe(true);
   await page.getByRole('button', { name: 'Undo' }).click();

@@ -95,14 +95,18 @@ export function createJobs(store: Store, client: CoreClient): Jobs {
     }
   };
 
+  let comparisons = 0;
   const compareRows = async () => {
+    comparisons += 1;
+    const own = comparisons;
     const record = activeRecord(store.get());
     if (record === null) return;
     const rows = record.rows.filter(({ progress }) => progress.kind === 'fitted');
     const answer = await client.compare(
+      `compare-${own}`,
       rows.flatMap(({ progress }) => (progress.kind === 'fitted' ? [progress.fit] : [])),
     );
-    if (answer.ok)
+    if (answer.ok && own === comparisons)
       store.set((state) => {
         const comparison = { rowIds: rows.map(({ id }) => id), groups: answer.value };
         return { ...state, comparison, view: withChoice(state, comparison) };

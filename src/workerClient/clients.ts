@@ -16,7 +16,7 @@ export interface CoreClient {
   fit(key: string, request: FitRequest): Promise<Result<Fit>>;
   diagnose(key: string, request: DiagnoseRequest): Promise<Result<Judgement>>;
   predict(key: string, request: PredictRequest): Promise<Result<Prediction>>;
-  compare(fits: readonly Fit[]): Promise<Result<readonly ComparisonGroup[]>>;
+  compare(key: string, fits: readonly Fit[]): Promise<Result<readonly ComparisonGroup[]>>;
   read(request: ReadRequest, progress: (fraction: number) => void): Promise<ReadAnswer>;
   abort(key: string): void;
   abortAll(): void;
@@ -42,8 +42,8 @@ export function createCoreClient(): CoreClient {
       safe(modelling.run<Result<Judgement>>(key, async (remote) => await remote.diagnose(request))),
     predict: (key, request) =>
       safe(modelling.run<Result<Prediction>>(key, async (remote) => await remote.predict(request))),
-    compare: (fits) =>
-      safe(modelling.run<Result<readonly ComparisonGroup[]>>('compare', async (remote) => await remote.compare(fits))),
+    compare: (key, fits) =>
+      safe(modelling.run<Result<readonly ComparisonGroup[]>>(key, async (remote) => await remote.compare(fits))),
     read: (request, progress) =>
       reading
         .run<ReadAnswer>('read', async (remote) => await remote.read(request, Comlink.proxy(progress)))
