@@ -28,6 +28,7 @@ export function conditionalSurface({ likelihood }: Job): Surface {
       const ratio = exact.innovationVariance / found.innovationVariance;
       return {
         height: heightOf(found),
+        objective: found.sumOfSquares,
         beta: found.beta,
         innovationVariance: found.innovationVariance,
         betaInformation: exact.betaInformation.map((value) => value * ratio),

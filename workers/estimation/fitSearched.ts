@@ -24,6 +24,8 @@ export interface Surface {
   readonly gradientAt: (coefficients: Coefficients, gradient: Float64Array) => number;
   readonly implied: (coefficients: Coefficients) => {
     readonly height: number;
+    /** What the estimator minimises: −ln L, or the sum of squares. */
+    readonly objective: number;
     readonly beta: Float64Array;
     readonly innovationVariance: number;
     /** X′V⁻¹X/σ², row-major. */
@@ -31,7 +33,10 @@ export interface Surface {
   };
 }
 
-/** Fits by maximising the exact or the conditional likelihood. */
+/**
+ * Fits by maximising the exact or the conditional likelihood. The fit's ln L is the exact one in both cases; the maxima
+ * listed with it are those of what was searched.
+ */
 export function fitSearched(job: Job): Result<Fit> {
   const { request, candidate, likelihood, names, parameterCount, lambda } = job;
   const readings = likelihood.readingsUsed;
@@ -64,6 +69,7 @@ export function fitSearched(job: Job): Result<Fit> {
   const covariance = covarianceAt(terrain, surface, best, rows);
   const maxima = found.summits.map((summit) => maximumOf(job, space, surface, summit));
   const { parameters, logLikelihood: height } = maximumOf(job, space, surface, best);
+  const { objective } = surface.implied(space.coefficients);
   const warnings = [
     ...fitWarnings({
       candidate,
@@ -87,7 +93,7 @@ export function fitSearched(job: Job): Result<Fit> {
       logLikelihood: exact ? height : likelihood.atParameters(parameters),
       readingsUsed: readings,
       parameterCount,
-      outcome: outcomeOf(found, best, maxima),
+      outcome: outcomeOf(found, best, maxima, objective),
       warnings,
     }),
   };
@@ -110,7 +116,7 @@ function exactSurface({ likelihood }: Job): Surface {
     gradientAt: (coefficients, gradient) => likelihood.concentratedWithGradient(coefficients, gradient),
     implied: (coefficients) => {
       const { logLikelihood, ...rest } = likelihood.concentrated(coefficients);
-      return { height: logLikelihood, ...rest };
+      return { height: logLikelihood, objective: -logLikelihood, ...rest };
     },
   };
 }
@@ -158,14 +164,14 @@ function maximumOf(
   return { parameters, logLikelihood: height, reached, boundary, admissible };
 }
 
-function outcomeOf(found: Exploration, { landing }: Summit, maxima: readonly Maximum[]): Outcome {
+function outcomeOf(found: Exploration, { landing }: Summit, maxima: readonly Maximum[], objective: number): Outcome {
   const boundary = landing.held.some((value) => value !== 0);
   return {
     status: landing.status !== 'converged' ? 'stalled' : boundary ? 'boundary' : 'converged',
     iterations: found.iterations,
     evaluations: found.evaluations,
     gradientNorm: landing.gradientNorm,
-    objective: -landing.logLikelihood,
+    objective,
     starts: found.starts,
     maxima,
   };
