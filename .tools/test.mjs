@@ -45,7 +45,7 @@ check('Types', ['.tools/types.mjs']);
 check('Lint', [bin('eslint/bin/eslint.js'), '--config', '.config/eslint.config.js', '.']);
 suite(
   'Unit and reference tests',
-  [bin('vitest/vitest.mjs'), 'run', '--reporter=dot', '--reporter=json', `--outputFile.json=${out}/unit.json`],
+  [bin('vitest/vitest.mjs'), 'run', '--reporter=default', '--reporter=json', `--outputFile.json=${out}/unit.json`],
   `${out}/unit.json`,
   (r) => ({
     passed: r.numPassedTests,
