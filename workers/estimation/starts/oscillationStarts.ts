@@ -9,10 +9,15 @@ const TAKEN = 6;
 /** Neighbouring frequencies averaged where a trough is looked for. */
 const SMOOTHED = 2;
 /** Moduli of the AR and MA pair: an AR pair nearer to the circle makes a peak, an MA pair a trough. */
-const PEAK = { ar: 0.97, ma: 0.88 };
-const TROUGH = { ar: 0.88, ma: 0.97 };
+interface Moduli {
+  readonly ar: number;
+  readonly ma: number;
+}
+/** As wide as a peak or trough of the periodogram of n readings that is worth a maximum, but not wider than these. */
+const NEARER = { least: 0.97, steps: 20 };
+const FARTHER = { least: 0.88, steps: 45 };
 /** The same at the two ends of the spectrum, where a trough is that of a difference too many. */
-const EDGE = { ar: 0.93, ma: 0.995 };
+const EDGE: Moduli = { ar: 0.93, ma: 0.995 };
 
 /**
  * Starts with an AR and an MA pair of roots at one angle. The likelihood of a model with both has a maximum near each
@@ -36,7 +41,7 @@ export function oscillationStarts(space: SearchSpace, candidate: Candidate, cent
   const innovations = filtered(centred.subarray(0, MOST_READINGS), ar, ma);
   const power = periodogram(innovations);
   const angleOf = (index: number) => (2 * Math.PI * (index + 1)) / innovations.length;
-  const withPair = (angle: number, { ar: arModulus, ma: maModulus }: typeof PEAK) => {
+  const withPair = (angle: number, { ar: arModulus, ma: maModulus }: Moduli) => {
     const cosine = Math.cos(angle);
     return space.locate({
       ar: timesPair(ar, cosine, arModulus, -1),
@@ -45,13 +50,16 @@ export function oscillationStarts(space: SearchSpace, candidate: Candidate, cent
       seasonalMa: [...seasonalMa],
     });
   };
+  const [near, far] = [NEARER, FARTHER].map(({ least, steps }) => Math.max(least, 1 - steps / centred.length));
+  const peak: Moduli = { ar: near!, ma: far! };
+  const trough: Moduli = { ar: far!, ma: near! };
   const smoothed = power.map((_, j) => {
-    const near = power.subarray(Math.max(0, j - SMOOTHED), j + SMOOTHED + 1);
-    return -near.reduce((sum, value) => sum + value, 0) / near.length;
+    const about = power.subarray(Math.max(0, j - SMOOTHED), j + SMOOTHED + 1);
+    return -about.reduce((sum, value) => sum + value, 0) / about.length;
   });
   return [
-    ...summits(power).map((index) => withPair(angleOf(index), PEAK)),
-    ...summits(smoothed).map((index) => withPair(angleOf(index), TROUGH)),
+    ...summits(power).map((index) => withPair(angleOf(index), peak)),
+    ...summits(smoothed).map((index) => withPair(angleOf(index), trough)),
     withPair(angleOf(0), EDGE),
     withPair(Math.PI - angleOf(0), EDGE),
   ];
