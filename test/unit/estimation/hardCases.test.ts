@@ -168,6 +168,25 @@ describe('roots and factors', () => {
     expect(Math.abs(numbers['after']! / numbers['before']! - 2)).toBeLessThan(0.3);
   });
 
+  it.each([
+    ['none', 0.6574],
+    ['mean', 0.9549],
+  ] as const)('a unit MA root piles up on the circle as often as theory says, level %s', (level, probability) => {
+    // P(θ̂ = −1 | θ = −1) in the limit: Sargan & Bhargava 1983, Econometrica 51, 799–820; Anderson & Takemura 1986, J. Time
+    // Series Anal. 7, 155–171. In samples of 50 it is within 0.02 of that (simulation).
+    const replicates = 150;
+    let piled = 0;
+    for (let seed = 1; seed <= replicates; seed++) {
+      const fit = fitted(simulated(50, 1000 + seed, [], [-1]), { q: 1 }, level);
+      if (fit.parameters.ma[0] === -1) {
+        piled++;
+        expect(fit.standardErrors).toBeNull();
+      }
+    }
+    const error = Math.sqrt((probability * (1 - probability)) / replicates);
+    expect(Math.abs(piled / replicates - probability)).toBeLessThan(3 * error + 0.02);
+  });
+
   it('a fixed seasonal pattern: the seasonal MA root goes to the circle', () => {
     const noise = simulated(240, 9);
     const fit = fitted(
