@@ -175,6 +175,53 @@ describe('Box & Jenkins', () => {
   });
 });
 
+/** Independent dense likelihood in float64, 8 to 25 starts; the digits are those at which it settled. */
+describe('frozen values of further published series', () => {
+  const logs = (values: Float64Array) => values.map(Math.log);
+
+  it('Series D, AR(1): 0.87 in the book (least squares), and (0,1,1): θ 0.06 in its sign', () => {
+    const level = fitted(publishedSeries('seriesD'), { p: 1 }, { level: 'mean' });
+    near(level.parameters.ar[0], 0.86858, 5e-6);
+    near(level.parameters.mean, 9.10876, 5e-6);
+    near(level.parameters.innovationVariance, 0.0902385, 5e-8);
+    near(level.logLikelihood, -67.75168, 5e-6);
+    near(level.standardErrors![0], 0.0282, 5e-5);
+    const walk = fitted(publishedSeries('seriesD'), { d: 1, q: 1 });
+    near(walk.parameters.ma[0], -0.05891, 5e-6);
+    near(walk.parameters.innovationVariance, 0.09618, 5e-6);
+  });
+
+  it('Nottingham temperature, (1,0,0)×(0,1,1)₁₂', () => {
+    const { parameters, logLikelihood } = fitted(publishedSeries('nottingham'), { p: 1, D: 1, Q: 1, s: 12 });
+    near(parameters.ar[0], 0.23473, 5e-6);
+    near(parameters.seasonalMa[0], -0.86756, 5e-6);
+    near(parameters.innovationVariance, 5.43391, 5e-6);
+    near(logLikelihood, -524.871, 5e-4);
+  });
+
+  it('New Haven temperature, (0,1,1)', () => {
+    const { parameters, logLikelihood } = fitted(publishedSeries('newHaven'), { d: 1, q: 1 });
+    near(parameters.ma[0], -0.79827, 5e-6);
+    near(logLikelihood, -91.7586, 5e-5);
+  });
+
+  it('log gas consumption, (0,1,1)×(0,1,1)₄', () => {
+    const { parameters, logLikelihood } = fitted(logs(publishedSeries('gasUk')), { d: 1, q: 1, D: 1, Q: 1, s: 4 });
+    near(parameters.ma[0], -0.91917, 5e-6);
+    near(parameters.seasonalMa[0], -0.23532, 5e-6);
+    near(parameters.innovationVariance, 0.0109729, 5e-8);
+    near(logLikelihood, 85.0047, 5e-5);
+  });
+
+  it('sales, (1,1,1)', () => {
+    const { parameters, logLikelihood } = fitted(publishedSeries('sales'), { p: 1, d: 1, q: 1 });
+    near(parameters.ar[0], 0.87991, 5e-6);
+    near(parameters.ma[0], -0.64148, 5e-6);
+    near(parameters.innovationVariance, 1.77547, 5e-6);
+    near(logLikelihood, -254.368, 5e-4);
+  });
+});
+
 describe('a step', () => {
   it('Nile: the change at 1899 with AR(1) errors', () => {
     // Cobb 1978 places the change there; values of an independent dense likelihood, float64.
