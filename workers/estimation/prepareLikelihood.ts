@@ -11,6 +11,7 @@ import { GapFilter } from './engine/gapFilter.ts';
 import { numericGradient } from './engine/numericGradient.ts';
 import { ProfileGls } from './engine/profileGls.ts';
 import { scaledBeta } from './scaledBeta.ts';
+import { columnsForGaps, withoutGaps } from './engine/columnsForGaps.ts';
 import { prepareRecord, type PreparedRecord, type PrepareRequest } from './prepareRecord.ts';
 
 /** ln L with level, regression and σ² profiled out, and their values there, in the record's own units. */
@@ -46,9 +47,9 @@ export interface PreparedLikelihood {
  * Prepares the exact Gaussian likelihood of a record under a candidate's order, level and regressors.
  *
  * ln L is that of the record with a flat prior on its d + sD starting values, all constants kept, in the units of the
- * readings (the transform's Jacobian summed over the readings used). The engine is chosen by the record: without gaps the fast one,
- * with gaps the filter, with gaps and differencing the filter with a diffuse start; where rounding would eat the fast one's
- * answer the filter takes over.
+ * readings (the transform's Jacobian summed over the readings used). The engine is chosen by the record and the cost: without gaps, or
+ * with few of them beside long lags, the fast one; else the filter, with differencing with its diffuse start. Where rounding would eat
+ * the fast one's answer the filter takes over.
  *
  * @param request values (gaps as NaN), a checked candidate, window, covariates by name, λ
  * @returns see PreparedLikelihood; failures as `prepareRecord`
@@ -62,17 +63,19 @@ export function prepareLikelihood(request: PrepareRequest): Result<PreparedLikel
   const p = order.p + s * order.P;
   const q = order.q + s * order.Q;
   const { record, columns, differencing, scale, readingsUsed } = prepared;
-  const differenced = [record, ...columns].map((one) =>
-    differencing.length > 1 ? differenceRecord(one, differencing) : one,
-  );
-  const fast = prepared.gaps === 0 ? new FastEngine(differenced, p, q) : null;
-  const fastGls = fast && new ProfileGls(fast.count, 0);
+  const difference = (one: Float64Array) => (differencing.length > 1 ? differenceRecord(one, differencing) : one);
+  const differenced = [record, ...columns].map(difference);
+  const missing = columnsForGaps(record, p, q, differencing.length - 1, columns.length);
+  const filled = missing === null ? null : [withoutGaps(record), ...missing, ...columns].map(difference);
+  const fast = filled === null ? null : new FastEngine(filled, p, q, missing!.length);
+  const fastGls = fast && new ProfileGls(fast.count, fast.flat);
   let filter: GapFilter | null = null;
   let filterGls: ProfileGls | null = null;
   const slow = (): [GapFilter, ProfileGls] => {
-    filter ??= fast
-      ? new GapFilter(differenced, p, q, Float64Array.of(1))
-      : new GapFilter([record, ...columns], p, q, differencing);
+    filter ??=
+      prepared.gaps === 0
+        ? new GapFilter(differenced, p, q, Float64Array.of(1))
+        : new GapFilter([record, ...columns], p, q, differencing);
     filterGls ??= new ProfileGls(filter.count, filter.flat);
     return [filter, filterGls];
   };
@@ -117,7 +120,7 @@ export function prepareLikelihood(request: PrepareRequest): Result<PreparedLikel
       const gls = at(factors);
       const value = height(gls);
       if (gls === null) gradient.fill(0);
-      else if (gradientOf !== null && current === fast) gradientOf.write(factors, gls.profile, gradient);
+      else if (gradientOf !== null && current === fast) gradientOf.write(factors, gls, gradient);
       else numericGradient(factors, (near) => height(at(near)), value, readingsUsed, gradient);
       return value;
     },

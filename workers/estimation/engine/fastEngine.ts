@@ -15,7 +15,6 @@ const CANCELLATION = 1e5;
  */
 export class FastEngine implements Engine {
   readonly kind = 'fast';
-  readonly flat = 0;
   readonly count: number;
   readonly cross: Float64Array;
   readonly observed: number;
@@ -37,7 +36,13 @@ export class FastEngine implements Engine {
    * @param series the differenced record and its columns, all of length n, no gaps
    * @param p degree of the multiplied-out AR polynomial; @param q of the MA polynomial
    */
-  constructor(series: readonly Float64Array[], p: number, q: number) {
+  constructor(
+    series: readonly Float64Array[],
+    p: number,
+    q: number,
+    /** How many columns behind the record stand for missing readings, whose values have a flat prior. */
+    readonly flat = 0,
+  ) {
     const n = series[0]!.length;
     this.observed = n;
     this.pad = Math.max(p, q);

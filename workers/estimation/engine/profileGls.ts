@@ -6,6 +6,8 @@ export interface Profile {
   flatLogDeterminant: number;
   /** Coefficients of the profiled columns. */
   readonly beta: Float64Array;
+  /** Coefficients of all columns, flat ones first; 0 for a flat column the record does not see. */
+  readonly weights: Float64Array;
   /** X′V⁻¹X of the profiled columns after the flat ones, row-major. */
   readonly information: Float64Array;
 }
@@ -32,7 +34,13 @@ export class ProfileGls {
     private readonly flat: number,
   ) {
     const k = count - 1 - flat;
-    this.profile = { rss: 0, flatLogDeterminant: 0, beta: new Float64Array(k), information: new Float64Array(k * k) };
+    this.profile = {
+      rss: 0,
+      flatLogDeterminant: 0,
+      beta: new Float64Array(k),
+      weights: new Float64Array(count - 1),
+      information: new Float64Array(k * k),
+    };
     this.factor = new Float64Array(count * count);
     this.order = [...Array.from({ length: count - 1 }, (_, i) => i + 1), 0];
   }
@@ -60,12 +68,9 @@ export class ProfileGls {
         } else profile.rss = sum;
       }
     }
-    const last = (count - 1) * count + flat;
-    for (let i = k - 1; i >= 0; i--) {
-      let sum = L[last + i]!;
-      for (let j = i + 1; j < k; j++) sum -= L[(flat + j) * count + flat + i]! * profile.beta[j]!;
-      profile.beta[i] = sum / L[(flat + i) * count + flat + i]!;
-    }
+    for (let i = 0; i < count - 1; i++) profile.weights[i] = L[(count - 1) * count + i]!;
+    this.unwind(profile.weights, count - 1);
+    for (let i = 0; i < k; i++) profile.beta[i] = profile.weights[flat + i]!;
     for (let i = 0; i < k; i++) {
       for (let j = 0; j < k; j++) {
         let sum = 0;
@@ -75,5 +80,28 @@ export class ProfileGls {
       }
     }
     return profile.rss > 0;
+  }
+
+  /**
+   * Weights of the flat columns in their k-th combination of unit length in the metric V⁻¹, orthogonal to those before it; null where the
+   * record does not see column k. The sum over k of d(b′V⁻¹b) is d ln |F′V⁻¹F|.
+   */
+  flatCombination(k: number): Float64Array | null {
+    if (this.factor[k * this.count + k] === 0) return null;
+    const weights = new Float64Array(this.flat);
+    weights[k] = 1;
+    this.unwind(weights, this.flat);
+    return weights;
+  }
+
+  /** x = L′⁻¹ x over the first n columns; those not seen get 0. */
+  private unwind(x: Float64Array, n: number): void {
+    const { factor: L, count } = this;
+    for (let i = n - 1; i >= 0; i--) {
+      const pivot = L[i * count + i]!;
+      let sum = x[i]!;
+      for (let j = i + 1; j < n; j++) sum -= L[j * count + i]! * x[j]!;
+      x[i] = pivot === 0 ? 0 : sum / pivot;
+    }
   }
 }
