@@ -13,9 +13,9 @@ interface Moduli {
   readonly ar: number;
   readonly ma: number;
 }
-/** As wide as a peak or trough of the periodogram of n readings that is worth a maximum, but not wider than these. */
-const NEARER = { least: 0.97, steps: 20 };
-const FARTHER = { least: 0.88, steps: 45 };
+/** Moduli of the nearer and the farther pair, and, for long records, how many nths from the circle they may be too. */
+const WIDE = { near: 0.97, far: 0.88 };
+const NARROW = { near: 20, far: 45 };
 /** The same at the two ends of the spectrum, where a trough is that of a difference too many. */
 const EDGE: Moduli = { ar: 0.93, ma: 0.995 };
 
@@ -50,16 +50,19 @@ export function oscillationStarts(space: SearchSpace, candidate: Candidate, cent
       seasonalMa: [...seasonalMa],
     });
   };
-  const [near, far] = [NEARER, FARTHER].map(({ least, steps }) => Math.max(least, 1 - steps / centred.length));
-  const peak: Moduli = { ar: near!, ma: far! };
-  const trough: Moduli = { ar: far!, ma: near! };
+  const n = centred.length;
+  const narrow = { near: 1 - NARROW.near / n, far: 1 - NARROW.far / n };
+  const widths = narrow.near > WIDE.near ? [WIDE, narrow] : [WIDE];
   const smoothed = power.map((_, j) => {
     const about = power.subarray(Math.max(0, j - SMOOTHED), j + SMOOTHED + 1);
     return -about.reduce((sum, value) => sum + value, 0) / about.length;
   });
+  const [peaks, troughs] = [summits(power), summits(smoothed)];
   return [
-    ...summits(power).map((index) => withPair(angleOf(index), peak)),
-    ...summits(smoothed).map((index) => withPair(angleOf(index), trough)),
+    ...widths.flatMap(({ near, far }) => [
+      ...peaks.map((index) => withPair(angleOf(index), { ar: near, ma: far })),
+      ...troughs.map((index) => withPair(angleOf(index), { ar: far, ma: near })),
+    ]),
     withPair(angleOf(0), EDGE),
     withPair(Math.PI - angleOf(0), EDGE),
   ];
