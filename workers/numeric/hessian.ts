@@ -8,8 +8,8 @@ export interface HessianEstimate {
 
 /** Levels of halving in the extrapolation table: errors of order h², h⁴, h⁶ are removed. */
 const LEVELS = 4;
-/** Error relative to the column at which further halving is not worth an evaluation. */
-const ENOUGH = 1e-8;
+/** Estimated error, relative to the column, at which further halving is not worth an evaluation; the true one is smaller. */
+const ENOUGH = 1e-6;
 
 /**
  * Hessian of a function (more generally the Jacobian of a vector field that is a gradient) from its gradients by
