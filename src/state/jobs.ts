@@ -54,7 +54,7 @@ export function createJobs(store: Store, client: CoreClient): Jobs {
     };
     set(ticket, (one) => withProgress(one, { kind: 'fitting' }));
     const values = series.values;
-    const answer = await client.fit(row.id, {
+    const request = {
       values,
       candidate: row.candidate,
       seed,
@@ -62,7 +62,11 @@ export function createJobs(store: Store, client: CoreClient): Jobs {
       columns,
       neighbours: fitsOf(record),
       seriesHash: record.seriesHash,
-    });
+    };
+    // The quick answer is shown at once; the wide search goes on and corrects it where it finds a higher maximum.
+    const quick = await client.fit(row.id, { ...request, effort: 'first' });
+    if (quick.ok) set(ticket, (one) => withProgress(one, { kind: 'fitted', fit: quick.value, judgement: null }));
+    const answer = quick.ok ? await client.fit(row.id, { ...request, effort: 'thorough' }) : quick;
     if (!answer.ok) {
       if (answer.failure.code !== 'cancelled')
         set(ticket, (one) => withProgress(one, { kind: 'failed', failure: answer.failure }));
@@ -146,7 +150,7 @@ export function createJobs(store: Store, client: CoreClient): Jobs {
         ...state,
         records: state.records.map((record) => ({
           ...record,
-          rows: record.rows.map((row) => (row.progress.kind === 'fitting' ? waitingRow(row) : row)),
+          rows: record.rows.map((row) => (isUnderWay(row) ? waitingRow(row) : row)),
         })),
       }));
     },
@@ -159,6 +163,11 @@ function withChoice(state: AppState, { rowIds, groups }: AppState['comparison'])
   const best = rowIds[groups[0]?.members[0]?.index ?? -1];
   if (state.view.chosen !== null || best === undefined || rowIds.length < all.length) return state.view;
   return { ...state.view, chosen: all.findIndex(({ id }) => id === best) };
+}
+
+/** Fitting, or fitted and still being searched and checked. */
+function isUnderWay({ progress }: Row): boolean {
+  return progress.kind === 'fitting' || (progress.kind === 'fitted' && progress.judgement === null);
 }
 
 function fitsOf(record: RecordState): Fit[] {

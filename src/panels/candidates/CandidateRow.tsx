@@ -23,7 +23,7 @@ export function CandidateRow({ row, chosen, columns }: RowProps) {
   const fit = progress.kind === 'fitted' ? progress.fit : null;
   const judgement = progress.kind === 'fitted' ? progress.judgement : null;
   const failure = progress.kind === 'failed' ? failureText(progress.failure) : null;
-  const state = progress.kind === 'fitted' && judgement === null ? 'checking' : progress.kind;
+  const state = progress.kind === 'fitted' && judgement === null ? 'searching on' : progress.kind;
 
   return (
     <>
