@@ -41,6 +41,11 @@ export function formatNumber(value: number | null, digits = 5): string {
   return typeset(value.toFixed(Math.min(decimals, 20)));
 }
 
+/** A reading as it was read: all its digits, none added. */
+export function formatReading(value: number): string {
+  return Number.isNaN(value) ? 'gap' : typeset(String(Number(value.toPrecision(15))));
+}
+
 /** A number with a fixed count of decimals, for columns that line up on the point. */
 export function formatFixed(value: number | null, decimals: number): string {
   if (value === null || Number.isNaN(value)) return '–';

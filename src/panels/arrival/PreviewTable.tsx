@@ -1,5 +1,5 @@
 import type { PreviewRow, Sniffed } from '../../../workers/contract/reading.ts';
-import { formatNumber } from '../../format/numbers.ts';
+import { formatReading } from '../../format/numbers.ts';
 
 const troubles: Record<PreviewRow['trouble'], string> = {
   none: '',
@@ -42,7 +42,7 @@ export function PreviewTable({ sniffed }: { readonly sniffed: Sniffed }) {
                   {row.cells[index] ?? ''}
                 </td>
               ))}
-              <td className="number">{Number.isNaN(row.value) ? 'gap' : formatNumber(row.value, 8)}</td>
+              <td className="number">{formatReading(row.value)}</td>
               <td>{troubles[row.trouble]}</td>
             </tr>
           ))}

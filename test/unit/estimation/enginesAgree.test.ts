@@ -117,3 +117,23 @@ test('few gaps beside long lags take columns, many gaps beside short lags the fi
   expect(columnsForGaps(many, 1, 1, 0, 1)).toBeNull();
   expect(columnsForGaps(new Float64Array(10), 1, 1, 0, 1)).toEqual([]);
 });
+
+test.each([
+  ['ARMA(1,1)', order(1, 0, 1), factors([0.8], [-0.4])],
+  ['AR(3)', order(3, 0, 0), factors([0.5, 0.1, 0.2], [])],
+  ['(1,0,2)(1,0,1)₄', order(1, 0, 2, 1, 0, 1, 4), factors([0.5], [0.3, 0.2], [0.4], [-0.3])],
+] as const)('%s: stretches between gaps at once or step by step, to rounding', (_name, o, at) => {
+  const random = createRandom(5);
+  const record = Float64Array.from({ length: 3000 }, (_, t) =>
+    [700, 701, 702, 704, 1500, 2996].includes(t) ? NaN : random.normal(),
+  );
+  const column = Float64Array.from({ length: 3000 }, (_, t) => Math.cos(t));
+  const { ar, ma } = expandPolynomials(at, o.s);
+  const whole = new GapFilter([record, column], ar.length, ma.length, Float64Array.of(1));
+  let steps = 0;
+  const stepwise = new GapFilter([record, column], ar.length, ma.length, Float64Array.of(1), () => (steps += 1));
+  expect(whole.evaluate(ar, ma) && stepwise.evaluate(ar, ma)).toBe(true);
+  expect(steps).toBe(3000);
+  expect(whole.logDeterminant).toBeCloseTo(stepwise.logDeterminant, 11);
+  whole.cross.forEach((value, i) => expect(Math.abs(value / stepwise.cross[i]! - 1)).toBeLessThan(1e-11));
+});

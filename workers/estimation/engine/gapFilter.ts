@@ -1,5 +1,8 @@
+import { sparsePolynomial, type SparsePolynomial } from '../../model/expandPolynomials.ts';
 import type { Engine } from './engine.ts';
+import { dot } from './fastEngine.ts';
 import { startCovariance } from './startCovariance.ts';
+import { steadyStretch } from './steadyRecursion.ts';
 
 /** Below this the covariance of the predictor state is nothing beside the unit innovation variance. */
 const NOTHING = 1e-20;
@@ -35,6 +38,7 @@ export class GapFilter implements Engine {
   private readonly lead: Float64Array;
   private readonly row: Float64Array;
   private readonly errors: Float64Array;
+  private innovations: Float64Array[] | null = null;
   private readonly known: number[];
 
   /**
@@ -86,13 +90,18 @@ export class GapFilter implements Engine {
     }
     // Column 1…flat: the values before the record, the latest first.
     for (let k = 0; k < flat; k++) state[(1 + k) * r + m + k] = 1;
+    const sparse = [sparsePolynomial(ar), sparsePolynomial(ma)] as const;
     let settled = false;
     for (let t = 0; t < this.present.length; t++) {
+      if (settled && this.sink === null && flat === 0) {
+        t = this.stretch(t, ...sparse);
+        if (t === this.present.length) break;
+      }
       const seen = this.present[t] === 1;
       const variance = settled ? 1 : this.predictVariance();
       this.predictErrors(t, seen);
       if (seen) {
-        this.logDeterminant += Math.log(variance);
+        if (variance !== 1) this.logDeterminant += Math.log(variance);
         for (let i = 0; i < count; i++)
           for (let j = 0; j <= i; j++) this.cross[i * count + j]! += (this.errors[i]! * this.errors[j]!) / variance;
       }
@@ -105,6 +114,51 @@ export class GapFilter implements Engine {
     }
     for (let i = 0; i < count; i++) for (let j = 0; j < i; j++) this.cross[j * count + i] = this.cross[i * count + j]!;
     return true;
+  }
+
+  /**
+   * From a settled state to the next gap: the steady recursion with what the past still puts into its first m values.
+   *
+   * @returns the place of the gap, or the end
+   */
+  private stretch(from: number, ar: SparsePolynomial, ma: SparsePolynomial): number {
+    const { present, count, series, m } = this;
+    let to = from;
+    while (to < present.length && present[to] === 1) to++;
+    if (to === from) return to;
+    this.innovations ??= series.map((one) => new Float64Array(one.length));
+    const filtered = this.innovations;
+    for (let i = 0; i < count; i++) {
+      const w = series[i]!;
+      const e = filtered[i]!;
+      const s = this.state.slice(i * m, (i + 1) * m);
+      const head = Math.min(to, from + m);
+      for (let t = from; t < head; t++) {
+        let value = w[t]! - s[t - from]!;
+        for (let k = 0; k < ar.lags.length && ar.lags[k]! <= t - from; k++)
+          value -= ar.values[k]! * w[t - ar.lags[k]!]!;
+        for (let k = 0; k < ma.lags.length && ma.lags[k]! <= t - from; k++)
+          value -= ma.values[k]! * e[t - ma.lags[k]!]!;
+        e[t] = value;
+      }
+      if (head < to) steadyStretch(w, e, head, to, ar, ma);
+      for (let j = 0; j < m; j++) {
+        let value = s[to - from + j] ?? 0;
+        // Lag l puts the value at to + j − l into place j ahead.
+        for (let k = 0; k < ar.lags.length; k++) {
+          const at = to + j - ar.lags[k]!;
+          if (at < to && at >= from) value += ar.values[k]! * w[at]!;
+        }
+        for (let k = 0; k < ma.lags.length; k++) {
+          const at = to + j - ma.lags[k]!;
+          if (at < to && at >= from) value += ma.values[k]! * e[at]!;
+        }
+        this.state[i * m + j] = value;
+      }
+    }
+    for (let i = 0; i < count; i++)
+      for (let j = 0; j <= i; j++) this.cross[i * count + j]! += dot(filtered[i]!, filtered[j]!, from, to);
+    return to;
   }
 
   /** z′P into `row` and z′Pz + 1 back: z picks s_1 and −c_i of the last values. */

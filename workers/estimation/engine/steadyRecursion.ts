@@ -17,8 +17,24 @@ export function steadyRecursion(
   ar: SparsePolynomial,
   ma: SparsePolynomial,
 ): void {
-  filterAr(w, e, pad, pad + n, ar);
-  filterMa(e, pad, pad + n, ma);
+  steadyStretch(w, e, pad, pad + n, ar, ma);
+}
+
+/**
+ * The same recursion over the places from…to of longer arrays, going on from what stands before them.
+ *
+ * @param from at least the highest lag
+ */
+export function steadyStretch(
+  w: Float64Array,
+  e: Float64Array,
+  from: number,
+  to: number,
+  ar: SparsePolynomial,
+  ma: SparsePolynomial,
+): void {
+  filterAr(w, e, from, to, ar);
+  filterMa(e, from, to, ma);
 }
 
 function filterAr(
@@ -49,19 +65,19 @@ function filterMa(e: Float64Array, from: number, to: number, { lags, values }: S
   if (count === 0) return;
   const theta = values[0]!;
   if (count === 1 && lags[0] === 1) {
-    let last = 0;
+    let last = e[from - 1]!;
     for (let t = from; t < to; t++) e[t] = last = e[t]! - theta * last;
   } else if (count === 2 && lags[1] === 2) {
     const second = values[1]!;
-    let last = 0;
-    let before = 0;
+    let last = e[from - 1]!;
+    let before = e[from - 2]!;
     for (let t = from; t < to; t++) {
       const now = e[t]! - second * before - theta * last;
       before = last;
       e[t] = last = now;
     }
   } else if (lags[0] === 1) {
-    let last = 0;
+    let last = e[from - 1]!;
     for (let t = from; t < to; t++) {
       let now = e[t]!;
       for (let k = 1; k < count; k++) now -= values[k]! * e[t - lags[k]!]!;
