@@ -68,6 +68,8 @@ export function sortValue(row: Row, column: string, comparison: AppState['compar
       return standingOf(comparison, row.id)?.differences.aicc ?? null;
     case 'whiteness':
       return judgement === null ? null : whitenessOf(row);
+    case 'leftOver':
+      return judgement === null ? null : Math.max(...judgement.evidence.correlogram.correlations.map(Math.abs));
     case 'verdict':
       return judgement === null ? null : ['sound', 'doubtful', 'unsound'].indexOf(judgement.verdict.standing);
     default:

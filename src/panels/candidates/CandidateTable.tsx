@@ -1,9 +1,10 @@
 import { Fragment, useMemo } from 'react';
+import type { Candidate } from '../../../workers/contract/candidate.ts';
 import type { ComparisonGroup } from '../../../workers/contract/selection.ts';
 import { counted } from '../../format/numbers.ts';
-import type { RecordState } from '../../state/appState.ts';
+import type { RecordState, Row } from '../../state/appState.ts';
 import { progressCounts, sortedRows, standingOf } from '../../state/selectors.ts';
-import { plainCandidate } from '../../state/startingCandidates.ts';
+import { candidateKey, plainCandidate } from '../../state/startingCandidates.ts';
 import { useActions, useAppState } from '../../state/useApp.ts';
 import { CandidateRow } from './CandidateRow.tsx';
 import { choosable } from './columns.ts';
@@ -38,16 +39,8 @@ export function CandidateTable({ record }: { readonly record: RecordState }) {
   const busy = counts.busy > 0 && record.source.kind === 'loaded';
 
   const addNext = () => {
-    // The first ARMA(p,q) with mean that is not in the table yet, in order of p + q.
-    const taken = new Set(rows.map(({ candidate }) => JSON.stringify(candidate)));
-    for (let sum = 1; sum < 8; sum += 1)
-      for (let q = 0; q <= sum; q += 1) {
-        const next = plainCandidate({ p: sum - q, q }, 'mean');
-        if (!taken.has(JSON.stringify(next))) {
-          actions.addCandidate(next);
-          return;
-        }
-      }
+    const next = nextCandidate(rows, rows[view.chosen ?? 0]?.candidate ?? plainCandidate({}, 'mean'));
+    if (next !== null) actions.addCandidate(next);
   };
 
   return (
@@ -87,9 +80,7 @@ export function CandidateTable({ record }: { readonly record: RecordState }) {
                   number
                 />
               ))}
-              <th scope="col" className="strip-column">
-                left over
-              </th>
+              <SortHeading name="leftOver" heading="left over" says="residual correlations; sorts by the largest" />
               <SortHeading name="verdict" heading="Verdict" says="sound, doubtful or unsound" />
             </tr>
           </thead>
@@ -119,6 +110,28 @@ export function CandidateTable({ record }: { readonly record: RecordState }) {
       </p>
     </section>
   );
+}
+
+/** Steps in (p, q) from the chosen candidate, nearest first. */
+const steps = [
+  [1, 0],
+  [0, 1],
+  [1, 1],
+  [2, 0],
+  [0, 2],
+  [2, 1],
+  [1, 2],
+  [2, 2],
+  [3, 0],
+  [3, 3],
+] as const;
+
+/** The nearest larger neighbour of a candidate that is not in the table yet. */
+function nextCandidate(rows: readonly Row[], from: Candidate): Candidate | null {
+  const taken = new Set(rows.map(({ candidate }) => candidateKey(candidate)));
+  const { order } = from;
+  const near = steps.map(([p, q]) => ({ ...from, order: { ...order, p: order.p + p, q: order.q + q } }));
+  return near.find((candidate) => !taken.has(candidateKey(candidate))) ?? null;
 }
 
 /** Which columns are shown; kept in the session. */
