@@ -38,3 +38,46 @@ test('a damaged or foreign link leaves a working page and says so', async ({ pag
     await expect(page.getByRole('button', { name: 'Open record' })).toBeEnabled();
   }
 });
+
+/** Files that can be read in spite of a fault: what was found is said, with the line, before anything is computed. */
+const faulty: { name: string; text: string; says: RegExp }[] = [
+  {
+    name: 'ragged.csv',
+    text: [
+      'time,flow,level',
+      ...Array.from({ length: 40 }, (_, i) => (i === 7 ? row(i, '1.5') : `${row(i, String(i % 7))},2`)),
+    ].join('\n'),
+    says: /1 row with more or fewer cells than the header \(line 9\)/,
+  },
+  {
+    name: 'twice.csv',
+    text: ['time,flow', ...Array.from({ length: 40 }, (_, i) => row(i, String(i % 7))), row(39, '3')].join('\n'),
+    says: /1 row with a time that was there already/,
+  },
+];
+
+for (const { name, text, says } of faulty) {
+  test(`${name} is read, and says what was found`, async ({ page }) => {
+    await page.goto('/');
+    await expect(page.getByRole('table', { name: 'Candidates' }).getByText(/fitted/i)).toHaveCount(3);
+    await dropFile(page, name, text);
+    await expect(page.locator('.arrival').getByText(says)).toBeVisible();
+    await page.getByRole('button', { name: 'Use this record' }).click();
+    await expect(page.getByRole('table', { name: 'Candidates' }).getByText('fitted', { exact: true })).toHaveCount(3);
+  });
+}
+
+test('a million rows are read while the page stays in use', async ({ page }) => {
+  const rows = ['second,flow'];
+  for (let i = 0; i < 1_000_000; i += 1) rows.push(`${i},${((i * 7919) % 1000) / 100}`);
+  await page.goto('/');
+  await expect(page.getByRole('table', { name: 'Candidates' }).getByText(/fitted/i)).toHaveCount(3);
+  await page
+    .locator('input[type=file]')
+    .setInputFiles({ name: 'million.csv', mimeType: 'text/csv', buffer: Buffer.from(rows.join('\n')) });
+  await page.getByRole('button', { name: 'Dark' }).click();
+  await expect(page.locator('html')).toHaveAttribute('data-theme', 'dark');
+  await expect(page.locator('.arrival .sentence')).toContainText('1\u2009000\u2009000 rows', { timeout: 40_000 });
+  await page.getByRole('button', { name: 'Dismiss' }).click();
+  await expect(page.getByRole('table', { name: 'Candidates' }).getByText(/fitted/i)).toHaveCount(3);
+});
