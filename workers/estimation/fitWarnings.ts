@@ -61,10 +61,7 @@ function searchWarnings({ found, best }: WarningGrounds): Warning[] {
 function rootWarnings({ candidate, coefficients, readings, best, covariance, rows, differencing }: WarningGrounds) {
   const warnings: Warning[] = [];
   const { order } = candidate;
-  const ar = largestArModulus(coefficients, order.s);
-  if (ar > 1 - NEAR_UNIT / readings) {
-    warnings.push({ code: 'nearUnitAr', numbers: { modulus: ar, limit: 1 - NEAR_UNIT / readings, readings } });
-  }
+  warnings.push(...nearUnit(coefficients, order.s, readings));
   if (best.landing.held.some((value) => value !== 0)) {
     warnings.push({ code: 'maOnCircle', numbers: { modulus: 1, d: order.d, D: order.D } });
   }
@@ -85,6 +82,20 @@ function rootWarnings({ candidate, coefficients, readings, best, covariance, row
     warnings.push({ code: 'spuriousPair', numbers: { ...close, excluded: 0 } });
   }
   return warnings;
+}
+
+/** An AR root near the circle; one of a seasonal factor is judged in Bˢ, by the number of seasons. */
+function nearUnit({ ar, seasonalAr }: Coefficients, season: number, readings: number): Warning[] {
+  const none = new Float64Array(0);
+  const regular = { modulus: largestArModulus({ ar, seasonalAr: none }, 1), limit: 1 - NEAR_UNIT / readings, readings };
+  const seasons = readings / Math.max(season, 1);
+  const seasonal = {
+    modulus: largestArModulus({ ar: none, seasonalAr }, 1),
+    limit: Math.max(0.5, 1 - NEAR_UNIT / seasons),
+    readings,
+  };
+  const near = [regular, seasonal].find(({ modulus, limit }) => modulus > limit);
+  return near === undefined ? [] : [{ code: 'nearUnitAr', numbers: near }];
 }
 
 function curvatureWarnings({ covariance, best }: WarningGrounds): Warning[] {
