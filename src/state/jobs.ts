@@ -157,11 +157,21 @@ export function createJobs(store: Store, client: CoreClient): Jobs {
   };
 }
 
-/** Until the person chooses, the best row of the largest group is shown, once all are fitted. */
+const ranks = ['sound', 'doubtful', 'unsound'] as const;
+
+/** Until the person chooses, the row with the best verdict is shown, the best of its group by criteria, once all are judged. */
 function withChoice(state: AppState, { rowIds, groups }: AppState['comparison']): AppState['view'] {
   const all = activeRecord(state)?.rows ?? [];
-  const best = rowIds[groups[0]?.members[0]?.index ?? -1];
-  if (state.view.chosen !== null || best === undefined || rowIds.length < all.length) return state.view;
+  if (state.view.chosen !== null || rowIds.length < all.length) return state.view;
+  const ranked = groups.flatMap(({ members }) => members.map(({ index }) => rowIds[index]));
+  const rankOf = (id: string | undefined) => {
+    const progress = all.find((row) => row.id === id)?.progress;
+    return progress?.kind === 'fitted' && progress.judgement !== null
+      ? ranks.indexOf(progress.judgement.verdict.standing)
+      : -1;
+  };
+  if (ranked.some((id) => rankOf(id) < 0)) return state.view;
+  const best = ranked.reduce((one, other) => (rankOf(other) < rankOf(one) ? other : one), ranked[0]);
   return { ...state.view, chosen: all.findIndex(({ id }) => id === best) };
 }
 
