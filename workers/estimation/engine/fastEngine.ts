@@ -1,7 +1,7 @@
 import { sparsePolynomial, type SparsePolynomial } from '../../model/expandPolynomials.ts';
 import type { Engine } from './engine.ts';
 import { StartEffect } from './startEffect.ts';
-import { adjointRecursion, steadyRecursion } from './steadyRecursion.ts';
+import { adjointRecursion, shortRecursion, steadyRecursion } from './steadyRecursion.ts';
 
 /** Beyond this ratio of the steady sum of squares to the exact one, its subtraction costs too many digits. */
 const CANCELLATION = 1e5;
@@ -29,6 +29,9 @@ export class FastEngine implements Engine {
   readonly whitened: readonly Float64Array[];
   readonly shrunk: readonly Float64Array[];
   private readonly adjoint: Float64Array;
+  private readonly constant: readonly boolean[];
+  /** Σ e² of each series where the recursion gave it. */
+  private readonly squares: Float64Array;
   sparseAr: SparsePolynomial = sparsePolynomial(new Float64Array(0));
   sparseMa: SparsePolynomial = sparsePolynomial(new Float64Array(0));
 
@@ -53,24 +56,25 @@ export class FastEngine implements Engine {
     this.innovations = series.map(() => new Float64Array(n + this.pad));
     this.whitened = series.map(() => new Float64Array(this.start.m));
     this.shrunk = series.map(() => new Float64Array(this.start.m));
+    this.constant = series.map((values) => values.every((value) => value === values[0]));
+    this.squares = new Float64Array(series.length);
     this.adjoint = new Float64Array(n + 2 * this.pad);
   }
 
   evaluate(ar: Float64Array, ma: Float64Array): boolean {
-    const { start, pad, observed: n, count } = this;
+    const { start, count } = this;
     this.sparseAr = sparsePolynomial(ar);
     this.sparseMa = sparsePolynomial(ma);
     if (!start.prepare(ar, ma, this.sparseMa)) return false;
     this.logDeterminant = start.logDeterminant;
     for (let i = 0; i < count; i++) {
-      const e = this.innovations[i]!;
-      steadyRecursion(this.series[i]!, e, pad, n, this.sparseAr, this.sparseMa);
-      this.correct(i, e);
+      this.run(i);
+      this.correct(i, this.innovations[i]!);
     }
     let sane = true;
     for (let i = 0; i < count; i++) {
       for (let j = 0; j <= i; j++) {
-        const steady = dot(this.innovations[i]!, this.innovations[j]!, pad, pad + n);
+        const steady = i === j && !Number.isNaN(this.squares[i]!) ? this.squares[i]! : this.product(i, j);
         const y = dot(this.whitened[i]!, this.whitened[j]!, 0, start.m);
         const exact = steady - y + dot(this.shrunk[i]!, this.shrunk[j]!, 0, start.m);
         this.cross[i * count + j] = exact;
@@ -79,6 +83,36 @@ export class FastEngine implements Engine {
       }
     }
     return sane;
+  }
+
+  /** Innovations of one series started from nothing; those of a constant no longer change once the past has no effect. */
+  private run(i: number): void {
+    const { pad, observed: n } = this;
+    const e = this.innovations[i]!;
+    const w = this.series[i]!;
+    const steps = this.settles(i);
+    this.squares[i] = shortRecursion(w, e, pad, steps, this.sparseAr, this.sparseMa);
+    if (Number.isNaN(this.squares[i])) steadyRecursion(w, e, pad, steps, this.sparseAr, this.sparseMa);
+    if (steps === n) return;
+    const last = e[pad + steps - 1]!;
+    e.fill(last, pad + steps, pad + n);
+    this.squares[i] += (n - steps) * last * last;
+  }
+
+  /** Steps after which the innovations of a series are constant to rounding. */
+  private settles(i: number): number {
+    const { observed: n, pad } = this;
+    return this.constant[i] === true ? Math.min(n, this.start.reach + 2 * pad + 1) : n;
+  }
+
+  private product(i: number, j: number): number {
+    const { pad, observed: n } = this;
+    const [a, b] = this.settles(i) <= this.settles(j) ? [i, j] : [j, i];
+    const steps = this.settles(a);
+    const x = this.innovations[a]!;
+    const y = this.innovations[b]!;
+    const head = dot(x, y, pad, pad + steps);
+    return steps === n ? head : head + x[pad + steps]! * total(y, pad + steps, pad + n);
   }
 
   private correct(i: number, e: Float64Array): void {
@@ -115,5 +149,19 @@ export function dot(a: Float64Array, b: Float64Array, from: number, to: number):
     s3 += a[t + 3]! * b[t + 3]!;
   }
   for (; t < to; t++) s0 += a[t]! * b[t]!;
+  return s0 + s1 + (s2 + s3);
+}
+
+/** Σ a_t over [from, to), four partial sums. */
+function total(a: Float64Array, from: number, to: number): number {
+  let [s0, s1, s2, s3] = [0, 0, 0, 0];
+  let t = from;
+  for (; t + 3 < to; t += 4) {
+    s0 += a[t]!;
+    s1 += a[t + 1]!;
+    s2 += a[t + 2]!;
+    s3 += a[t + 3]!;
+  }
+  for (; t < to; t++) s0 += a[t]!;
   return s0 + s1 + (s2 + s3);
 }

@@ -21,6 +21,41 @@ export function steadyRecursion(
 }
 
 /**
+ * The same recursion for lags 1 and 2 alone, in one pass with everything in registers.
+ *
+ * @returns Σ e_t², so that the commonest orders need no second pass; NaN where the polynomials have other lags, and then nothing is done
+ */
+export function shortRecursion(
+  w: Float64Array,
+  e: Float64Array,
+  pad: number,
+  n: number,
+  ar: SparsePolynomial,
+  ma: SparsePolynomial,
+): number {
+  if (ar.degree > 2 || ma.degree > 2) return NaN;
+  const at = ({ lags, values }: SparsePolynomial, lag: number) => {
+    for (let k = 0; k < lags.length; k++) if (lags[k] === lag) return values[k]!;
+    return 0;
+  };
+  const [phi, psi, theta, eta] = [at(ar, 1), at(ar, 2), at(ma, 1), at(ma, 2)];
+  let [w1, w2, e1, e2] = [0, 0, 0, 0];
+  let sum = 0;
+  for (let t = pad; t < pad + n; t++) {
+    const now = w[t]!;
+    // What does not wait for the last innovation first: one product and one difference are the chain.
+    const value = now - phi * w1 - psi * w2 - eta * e2 - theta * e1;
+    w2 = w1;
+    w1 = now;
+    e2 = e1;
+    e1 = value;
+    e[t] = value;
+    sum += value * value;
+  }
+  return sum;
+}
+
+/**
  * The same recursion over the places from…to of longer arrays, going on from what stands before them.
  *
  * @param from at least the highest lag
