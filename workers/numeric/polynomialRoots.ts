@@ -5,16 +5,19 @@ export interface Complex {
 }
 
 const MOST_SWEEPS = 200;
+/** An imaginary part this small beside the real one is what rounding leaves of a simple real root. */
+const ROUNDING = 1e-13;
 
 /**
  * All roots of a real polynomial.
  *
  * Method: Aberth–Ehrlich iteration from points on the circles of the Newton polygon of the coefficients (Bini 1996, Numer. Algorithms 13,
- * 179–200), the polynomial evaluated in its reversed form outside the unit circle; roots whose imaginary part is rounding are returned
- * as real. Roots of multiplicity k are found to about the k-th root of rounding, as the problem allows.
+ * 179–200), the polynomial evaluated in its reversed form outside the unit circle. Roots whose imaginary part is rounding are returned
+ * as real, the others in exactly conjugate pairs. Roots of multiplicity k are found to about the k-th root of rounding, as the problem
+ * allows.
  *
- * @param coefficients c_0 + c_1 x + …; zeros at the top lower the degree, zeros at the bottom are roots at 0
- * @returns one entry a root; empty for a constant. NaN coefficients give NaN roots.
+ * @param coefficients c_0 + c_1 x + …; zeros at the top lower the degree, zeros at the bottom are roots at 0; roots of moduli 1e−150…1e150
+ * @returns one entry a root, roots at 0 first; empty for a constant. NaN or infinite coefficients give NaN roots.
  * @example (6, −5, 1) gives 2 and 3
  */
 export function polynomialRoots(coefficients: ArrayLike<number>): Complex[] {
@@ -25,8 +28,12 @@ export function polynomialRoots(coefficients: ArrayLike<number>): Complex[] {
   const degree = top - bottom;
   const zeros = Array.from({ length: bottom }, () => ({ re: 0, im: 0 }));
   if (degree <= 0) return zeros;
-  const c = Float64Array.from({ length: degree + 1 }, (_, i) => coefficients[bottom + i]!);
-  if (c.some((value) => Number.isNaN(value))) return Array.from({ length: degree }, () => ({ re: NaN, im: NaN }));
+  let most = 0;
+  for (let i = bottom; i <= top; i++) most = Math.max(most, Math.abs(coefficients[i]!));
+  if (!Number.isFinite(most)) return Array.from({ length: top }, () => ({ re: NaN, im: NaN }));
+  // Divided by a power of two, which rounds nothing, so that no product of coefficients overflows.
+  const unit = 2 ** Math.floor(Math.log2(most));
+  const c = Float64Array.from({ length: degree + 1 }, (_, i) => coefficients[bottom + i]! / unit);
   if (degree === 1) return [...zeros, { re: -c[0]! / c[1]!, im: 0 }];
   if (degree === 2) return [...zeros, ...quadratic(c)];
   return [...zeros, ...aberth(c)];
@@ -92,10 +99,37 @@ function aberth(c: Float64Array): Complex[] {
     }
     if (moving === 0) break;
   }
-  return Array.from(re, (value, k) => {
-    const other = im[k]!;
-    return { re: value, im: Math.abs(other) <= 1e-13 * Math.abs(value) ? 0 : other };
-  });
+  return paired(
+    Array.from(re, (value, k) => ({ re: value, im: Math.abs(im[k]!) <= ROUNDING * Math.abs(value) ? 0 : im[k]! })),
+  );
+}
+
+/**
+ * Roots of a real polynomial are real or conjugate: each root above the axis is averaged with the nearest mirror image below it, those
+ * farthest from the axis first. One left over belongs to a cluster on the axis and is put there.
+ */
+function paired(found: readonly Complex[]): Complex[] {
+  const roots = found.filter(({ im }) => im === 0);
+  const above = found.filter(({ im }) => im > 0).sort((a, b) => b.im - a.im);
+  const below = found.filter(({ im }) => im < 0);
+  for (const root of above) {
+    let nearest = -1;
+    let least = Infinity;
+    below.forEach((other, i) => {
+      const distance = Math.hypot(root.re - other.re, root.im + other.im);
+      if (distance < least) [least, nearest] = [distance, i];
+    });
+    const other = below[nearest];
+    if (other === undefined) {
+      roots.push({ re: root.re, im: 0 });
+      continue;
+    }
+    below.splice(nearest, 1);
+    const re = 0.5 * (root.re + other.re);
+    const im = 0.5 * (root.im - other.im);
+    roots.push({ re, im }, { re, im: -im });
+  }
+  return [...roots, ...below.map(({ re }) => ({ re, im: 0 }))];
 }
 
 /** p(z)/p′(z); outside the unit circle through the reversed polynomial, so that no power overflows. */
