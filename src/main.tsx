@@ -1,11 +1,11 @@
 import { createRoot } from 'react-dom/client';
 import { App } from './App.tsx';
-import { startAutosave, savedSession } from './state/autosave.ts';
-import { createActions } from './state/createActions.ts';
+import { startAutosave, savedSession } from './state/actions/autosave.ts';
+import { createActions } from './state/actions/createActions.ts';
 import { initialState } from './state/initialState.ts';
-import { browserPlatform } from './state/platform.ts';
+import { browserPlatform } from './state/actions/platform.ts';
 import { createStore } from './state/store.ts';
-import { openSession } from './state/openSession.ts';
+import { openSession } from './state/actions/openSession.ts';
 import { AppContext } from './state/useApp.ts';
 import { createCoreClient } from './workerClient/clients.ts';
 import './styles/tokens.css';

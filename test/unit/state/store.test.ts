@@ -1,9 +1,9 @@
 import { beforeEach, describe, expect, test } from 'vitest';
 import type { CoreClient } from '../../../src/workerClient/clients.ts';
-import { createActions } from '../../../src/state/createActions.ts';
+import { createActions } from '../../../src/state/actions/createActions.ts';
 import { envelopeOf } from '../../../src/state/envelopes.ts';
 import { initialState } from '../../../src/state/initialState.ts';
-import type { Platform } from '../../../src/state/platform.ts';
+import type { Platform } from '../../../src/state/actions/platform.ts';
 import { activeRows, progressCounts, sortedRows } from '../../../src/state/selectors.ts';
 import { plainCandidate, plausibleSeason, startingCandidates } from '../../../src/state/startingCandidates.ts';
 import { createStore, type Store } from '../../../src/state/store.ts';

@@ -1,10 +1,10 @@
-import type { Candidate } from '../../workers/contract/candidate.ts';
-import type { Fit } from '../../workers/contract/fit.ts';
-import type { CoreClient } from '../workerClient/clients.ts';
-import type { AppState, RecordState, Row } from './appState.ts';
-import { candidateKey } from './startingCandidates.ts';
-import type { Store } from './store.ts';
-import { activeRecord, waitingRow, withProgress, withRecord, withRow } from './updates.ts';
+import type { Candidate } from '../../../workers/contract/candidate.ts';
+import type { Fit } from '../../../workers/contract/fit.ts';
+import type { CoreClient } from '../../workerClient/clients.ts';
+import type { AppState, RecordState, Row } from '../appState.ts';
+import { candidateKey } from '../startingCandidates.ts';
+import type { Store } from '../store.ts';
+import { activeRecord, waitingRow, withProgress, withRecord, withRow } from '../updates.ts';
 
 /** Seed of every search, carried in each fit. */
 const seed = 1;

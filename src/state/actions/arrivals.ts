@@ -1,14 +1,14 @@
-import type { Dialect } from '../../workers/contract/dialect.ts';
-import type { ReadAnswer, ReadRecord } from '../../workers/contract/reading.ts';
-import { decodeFile } from '../import/decodeFile.ts';
-import { hashText } from '../import/hashFile.ts';
-import type { CoreClient } from '../workerClient/clients.ts';
-import type { AppState, Arrival, RecordState } from './appState.ts';
+import type { Dialect } from '../../../workers/contract/dialect.ts';
+import type { ReadAnswer, ReadRecord } from '../../../workers/contract/reading.ts';
+import { decodeFile } from '../../import/decodeFile.ts';
+import { hashText } from '../../import/hashFile.ts';
+import type { CoreClient } from '../../workerClient/clients.ts';
+import type { AppState, Arrival, RecordState } from '../appState.ts';
 import type { History } from './history.ts';
 import type { Jobs } from './jobs.ts';
-import { startingCandidates } from './startingCandidates.ts';
-import type { Store } from './store.ts';
-import { activeRecord, freshId, trouble, withNotice, withRecord } from './updates.ts';
+import { startingCandidates } from '../startingCandidates.ts';
+import type { Store } from '../store.ts';
+import { activeRecord, freshId, trouble, withNotice, withRecord } from '../updates.ts';
 
 export interface Arrivals {
   readonly openFile: (file: File) => Promise<void>;

@@ -1,5 +1,5 @@
-import type { CoreClient } from '../workerClient/clients.ts';
-import type { Actions } from './actionTypes.ts';
+import type { CoreClient } from '../../workerClient/clients.ts';
+import type { Actions } from '../actionTypes.ts';
 import { createArrivals } from './arrivals.ts';
 import { createCandidateActions } from './candidateActions.ts';
 import { createHistory } from './history.ts';
@@ -7,8 +7,8 @@ import { createJobs } from './jobs.ts';
 import { createLinks, type Links } from './links.ts';
 import type { Platform } from './platform.ts';
 import { saveDossier } from './saveDossier.ts';
-import type { Store } from './store.ts';
-import { trouble, withNotice } from './updates.ts';
+import type { Store } from '../store.ts';
+import { trouble, withNotice } from '../updates.ts';
 
 /** Ties the parts together. `links` is what start-up needs beside the actions. */
 export function createActions(

@@ -1,11 +1,11 @@
-import type { Candidate } from '../../workers/contract/candidate.ts';
-import type { Actions } from './actionTypes.ts';
-import type { RecordState } from './appState.ts';
+import type { Candidate } from '../../../workers/contract/candidate.ts';
+import type { Actions } from '../actionTypes.ts';
+import type { RecordState } from '../appState.ts';
 import type { History } from './history.ts';
 import type { Jobs } from './jobs.ts';
-import { candidateKey } from './startingCandidates.ts';
-import type { Store } from './store.ts';
-import { activeRecord, freshId, note, waitingRow, withActive, withNotice, withRow } from './updates.ts';
+import { candidateKey } from '../startingCandidates.ts';
+import type { Store } from '../store.ts';
+import { activeRecord, freshId, note, waitingRow, withActive, withNotice, withRow } from '../updates.ts';
 
 type CandidateActions = Pick<
   Actions,

@@ -1,5 +1,5 @@
-import type { AppState, RecordState } from './appState.ts';
-import type { Store } from './store.ts';
+import type { AppState, RecordState } from '../appState.ts';
+import type { Store } from '../store.ts';
 
 interface Snapshot {
   readonly records: readonly RecordState[];

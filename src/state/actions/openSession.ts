@@ -1,7 +1,7 @@
-import type { Payload } from '../sessionUrl/encodeSession.ts';
-import type { Actions } from './actionTypes.ts';
+import type { Payload } from '../../sessionUrl/encodeSession.ts';
+import type { Actions } from '../actionTypes.ts';
 import type { Links } from './links.ts';
-import type { Store } from './store.ts';
+import type { Store } from '../store.ts';
 
 /** The record the page opens with when there is neither a link nor an earlier session. */
 export const firstExample = 'neutralisation-ph.csv';

@@ -1,12 +1,12 @@
-import { encodeSession, longLink, type Payload } from '../sessionUrl/encodeSession.ts';
-import { decodePayload, decodeSession, hashOf } from '../sessionUrl/decodeSession.ts';
-import type { Result } from '../../workers/contract/result.ts';
+import { encodeSession, longLink, type Payload } from '../../sessionUrl/encodeSession.ts';
+import { decodePayload, decodeSession, hashOf } from '../../sessionUrl/decodeSession.ts';
+import type { Result } from '../../../workers/contract/result.ts';
 import type { Arrivals } from './arrivals.ts';
-import { envelopeOf, recordsOf } from './envelopes.ts';
+import { envelopeOf, recordsOf } from '../envelopes.ts';
 import type { History } from './history.ts';
 import type { Jobs } from './jobs.ts';
-import type { Store } from './store.ts';
-import { activeRecord, note, trouble, withNotice } from './updates.ts';
+import type { Store } from '../store.ts';
+import { activeRecord, note, trouble, withNotice } from '../updates.ts';
 import type { Platform } from './platform.ts';
 
 export interface Links {

@@ -1,7 +1,7 @@
 import type { Platform } from './platform.ts';
-import type { Store } from './store.ts';
-import { chosenRow } from './selectors.ts';
-import { activeRecord, note, trouble, withNotice } from './updates.ts';
+import type { Store } from '../store.ts';
+import { chosenRow } from '../selectors.ts';
+import { activeRecord, note, trouble, withNotice } from '../updates.ts';
 
 /** Writes the dossier of the chosen candidate; the PDF library is loaded only now. */
 export async function saveDossier(store: Store, platform: Platform): Promise<void> {
@@ -15,7 +15,7 @@ export async function saveDossier(store: Store, platform: Platform): Promise<voi
   const { fit, judgement } = row.progress;
   const { source } = record;
   try {
-    const { makeDossier } = await import('../export/makeDossier.ts');
+    const { makeDossier } = await import('../../export/makeDossier.ts');
     const prediction = state.prediction?.fit === fit ? state.prediction.prediction : null;
     const content = await makeDossier({
       fileName: source.fileName,

@@ -1,11 +1,11 @@
 import { openDB } from 'idb';
-import type { Payload } from '../sessionUrl/encodeSession.ts';
-import { decodePayload } from '../sessionUrl/decodeSession.ts';
-import { envelopeOf } from './envelopes.ts';
-import { persistedFields } from './persistedFields.ts';
-import type { AppState } from './appState.ts';
-import type { Store } from './store.ts';
-import { activeRecord, note, withNotice } from './updates.ts';
+import type { Payload } from '../../sessionUrl/encodeSession.ts';
+import { decodePayload } from '../../sessionUrl/decodeSession.ts';
+import { envelopeOf } from '../envelopes.ts';
+import { persistedFields } from '../persistedFields.ts';
+import type { AppState } from '../appState.ts';
+import type { Store } from '../store.ts';
+import { activeRecord, note, withNotice } from '../updates.ts';
 
 const database = 'lagwright';
 const store = 'session';
