@@ -82,9 +82,9 @@ export function prepareLikelihood(request: PrepareRequest): Result<PreparedLikel
   const constant = readingsUsed * Math.log(scale) - prepared.logJacobian;
   let current: Engine;
 
-  /** Evaluates and profiles; null outside the region. */
-  const evaluate = (ar: Float64Array, ma: Float64Array): ProfileGls | null => {
-    if (fast !== null && fastGls !== null && fast.evaluate(ar, ma) && fastGls.solve(fast.cross)) {
+  /** Evaluates and profiles; null outside the region. `whole`: a gradient is to follow. */
+  const evaluate = (ar: Float64Array, ma: Float64Array, whole: boolean): ProfileGls | null => {
+    if (fast !== null && fastGls !== null && fast.evaluate(ar, ma, whole) && fastGls.solve(fast.cross)) {
       current = fast;
       return fastGls;
     }
@@ -98,9 +98,9 @@ export function prepareLikelihood(request: PrepareRequest): Result<PreparedLikel
     const spread = Math.log((2 * Math.PI * rss) / readingsUsed) + 1;
     return -0.5 * (readingsUsed * spread + current.logDeterminant + flatLogDeterminant) - constant;
   };
-  const at = (factors: Factors): ProfileGls | null => {
+  const at = (factors: Factors, whole = false): ProfileGls | null => {
     const { ar, ma } = expandPolynomials(factors, s);
-    return evaluate(ar, ma);
+    return evaluate(ar, ma, whole);
   };
   const gradientOf = fast && new FastGradient(fast, order, readingsUsed);
 
@@ -117,7 +117,7 @@ export function prepareLikelihood(request: PrepareRequest): Result<PreparedLikel
       return describe(prepared, gls, height(gls));
     },
     concentratedWithGradient: (factors, gradient) => {
-      const gls = at(factors);
+      const gls = at(factors, true);
       const value = height(gls);
       if (gls === null) gradient.fill(0);
       else if (gradientOf !== null && current === fast) gradientOf.write(factors, gls, gradient);
@@ -127,7 +127,7 @@ export function prepareLikelihood(request: PrepareRequest): Result<PreparedLikel
     conditional: (factors) => conditionalLikelihood(prepared, differenced, expandPolynomials(factors, s)),
     atParameters: (parameters) => {
       const { ar, ma } = expandPolynomials(parameters, s);
-      const gls = evaluate(ar, ma);
+      const gls = evaluate(ar, ma, false);
       if (gls === null) return -Infinity;
       const rss = fixedSumOfSquares(gls, scaledBeta(prepared, parameters));
       const variance = parameters.innovationVariance / scale ** 2;

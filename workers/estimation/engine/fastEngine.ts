@@ -1,7 +1,8 @@
 import { sparsePolynomial, type SparsePolynomial } from '../../model/expandPolynomials.ts';
 import type { Engine } from './engine.ts';
+import { shortRecursion } from './shortRecursion.ts';
 import { StartEffect } from './startEffect.ts';
-import { adjointRecursion, shortRecursion, steadyRecursion } from './steadyRecursion.ts';
+import { adjointRecursion, steadyRecursion } from './steadyRecursion.ts';
 
 /** Beyond this ratio of the steady sum of squares to the exact one, its subtraction costs too many digits. */
 const CANCELLATION = 1e5;
@@ -30,8 +31,14 @@ export class FastEngine implements Engine {
   readonly shrunk: readonly Float64Array[];
   private readonly adjoint: Float64Array;
   private readonly constant: readonly boolean[];
-  /** Σ e² of each series where the recursion gave it. */
+  /** Some column but the record is not constant. */
+  private readonly varied: boolean;
+  /** Σ e² of each series where the recursion gave it, and Σ e over its innovations that were not written. */
   private readonly squares: Float64Array;
+  private readonly rests: Float64Array;
+  private readonly sums = new Float64Array(2);
+  /** Innovations written at the last evaluation. */
+  private kept = 0;
   sparseAr: SparsePolynomial = sparsePolynomial(new Float64Array(0));
   sparseMa: SparsePolynomial = sparsePolynomial(new Float64Array(0));
 
@@ -57,16 +64,20 @@ export class FastEngine implements Engine {
     this.whitened = series.map(() => new Float64Array(this.start.m));
     this.shrunk = series.map(() => new Float64Array(this.start.m));
     this.constant = series.map((values) => values.every((value) => value === values[0]));
+    this.varied = this.constant.some((one, i) => i > 0 && !one);
     this.squares = new Float64Array(series.length);
+    this.rests = new Float64Array(series.length);
     this.adjoint = new Float64Array(n + 2 * this.pad);
   }
 
-  evaluate(ar: Float64Array, ma: Float64Array): boolean {
-    const { start, count } = this;
+  /** @param whole whether all innovations must be written, as the gradient needs them */
+  evaluate(ar: Float64Array, ma: Float64Array, whole = true): boolean {
+    const { start, count, observed: n } = this;
     this.sparseAr = sparsePolynomial(ar);
     this.sparseMa = sparsePolynomial(ma);
     if (!start.prepare(ar, ma, this.sparseMa)) return false;
     this.logDeterminant = start.logDeterminant;
+    this.kept = whole || this.varied ? n : this.settling();
     for (let i = 0; i < count; i++) {
       this.run(i);
       this.correct(i, this.innovations[i]!);
@@ -87,22 +98,28 @@ export class FastEngine implements Engine {
 
   /** Innovations of one series started from nothing; those of a constant no longer change once the past has no effect. */
   private run(i: number): void {
-    const { pad, observed: n } = this;
+    const { pad, observed: n, squares, rests, sums } = this;
     const e = this.innovations[i]!;
     const w = this.series[i]!;
     const steps = this.settles(i);
-    this.squares[i] = shortRecursion(w, e, pad, steps, this.sparseAr, this.sparseMa);
-    if (Number.isNaN(this.squares[i])) steadyRecursion(w, e, pad, steps, this.sparseAr, this.sparseMa);
+    const kept = Math.min(steps, this.kept);
+    const short = shortRecursion(w, e, pad, steps, this.sparseAr, this.sparseMa, kept, sums);
+    squares[i] = short ? sums[0]! : NaN;
+    rests[i] = short && kept < steps ? sums[1]! : NaN;
+    if (!short) steadyRecursion(w, e, pad, steps, this.sparseAr, this.sparseMa);
     if (steps === n) return;
     const last = e[pad + steps - 1]!;
-    e.fill(last, pad + steps, pad + n);
-    this.squares[i] += (n - steps) * last * last;
+    if (this.kept > steps) e.fill(last, pad + steps, pad + n);
+    squares[i] += (n - steps) * last * last;
   }
 
-  /** Steps after which the innovations of a series are constant to rounding. */
+  /** Steps after which the innovations of a constant no longer change to rounding. */
+  private settling(): number {
+    return Math.min(this.observed, this.start.reach + 2 * this.pad + 1);
+  }
+
   private settles(i: number): number {
-    const { observed: n, pad } = this;
-    return this.constant[i] === true ? Math.min(n, this.start.reach + 2 * pad + 1) : n;
+    return this.constant[i] === true ? this.settling() : this.observed;
   }
 
   private product(i: number, j: number): number {
@@ -112,7 +129,10 @@ export class FastEngine implements Engine {
     const x = this.innovations[a]!;
     const y = this.innovations[b]!;
     const head = dot(x, y, pad, pad + steps);
-    return steps === n ? head : head + x[pad + steps]! * total(y, pad + steps, pad + n);
+    if (steps === n) return head;
+    const last = x[pad + steps - 1]!;
+    if (this.settles(b) === steps) return head + (n - steps) * last * y[pad + steps - 1]!;
+    return head + last * (Number.isNaN(this.rests[b]!) ? total(y, pad + steps, pad + n) : this.rests[b]!);
   }
 
   private correct(i: number, e: Float64Array): void {
@@ -154,7 +174,10 @@ export function dot(a: Float64Array, b: Float64Array, from: number, to: number):
 
 /** Σ a_t over [from, to), four partial sums. */
 function total(a: Float64Array, from: number, to: number): number {
-  let [s0, s1, s2, s3] = [0, 0, 0, 0];
+  let s0 = 0;
+  let s1 = 0;
+  let s2 = 0;
+  let s3 = 0;
   let t = from;
   for (; t + 3 < to; t += 4) {
     s0 += a[t]!;

@@ -1,5 +1,8 @@
 import type { SparsePolynomial } from '../../model/expandPolynomials.ts';
 
+/** Steps of a block: what the first pass writes is still at hand for the second, and short calls are compiled once and well. */
+const BLOCK = 512;
+
 /**
  * e_t = w_t − Σ φ_i w_{t−i} − Σ θ_j e_{t−j} with nothing before the start.
  *
@@ -21,41 +24,6 @@ export function steadyRecursion(
 }
 
 /**
- * The same recursion for lags 1 and 2 alone, in one pass with everything in registers.
- *
- * @returns Σ e_t², so that the commonest orders need no second pass; NaN where the polynomials have other lags, and then nothing is done
- */
-export function shortRecursion(
-  w: Float64Array,
-  e: Float64Array,
-  pad: number,
-  n: number,
-  ar: SparsePolynomial,
-  ma: SparsePolynomial,
-): number {
-  if (ar.degree > 2 || ma.degree > 2) return NaN;
-  const at = ({ lags, values }: SparsePolynomial, lag: number) => {
-    for (let k = 0; k < lags.length; k++) if (lags[k] === lag) return values[k]!;
-    return 0;
-  };
-  const [phi, psi, theta, eta] = [at(ar, 1), at(ar, 2), at(ma, 1), at(ma, 2)];
-  let [w1, w2, e1, e2] = [0, 0, 0, 0];
-  let sum = 0;
-  for (let t = pad; t < pad + n; t++) {
-    const now = w[t]!;
-    // What does not wait for the last innovation first: one product and one difference are the chain.
-    const value = now - phi * w1 - psi * w2 - eta * e2 - theta * e1;
-    w2 = w1;
-    w1 = now;
-    e2 = e1;
-    e1 = value;
-    e[t] = value;
-    sum += value * value;
-  }
-  return sum;
-}
-
-/**
  * The same recursion over the places from…to of longer arrays, going on from what stands before them.
  *
  * @param from at least the highest lag
@@ -68,8 +36,11 @@ export function steadyStretch(
   ar: SparsePolynomial,
   ma: SparsePolynomial,
 ): void {
-  filterAr(w, e, from, to, ar);
-  filterMa(e, from, to, ma);
+  for (let t = from; t < to; t += BLOCK) {
+    const end = Math.min(t + BLOCK, to);
+    filterAr(w, e, t, end, ar);
+    filterMa(e, t, end, ma);
+  }
 }
 
 function filterAr(
@@ -83,7 +54,13 @@ function filterAr(
   const phi = values[0] ?? 0;
   if (lags.length === 0) for (let t = from; t < to; t++) e[t] = w[t]!;
   else if (lags.length === 1) for (let t = from; t < to; t++) e[t] = w[t]! - phi * w[t - a]!;
-  else {
+  else if (lags.length === 3) {
+    const b = lags[1]!;
+    const c = lags[2]!;
+    const psi = values[1]!;
+    const chi = values[2]!;
+    for (let t = from; t < to; t++) e[t] = w[t]! - phi * w[t - a]! - psi * w[t - b]! - chi * w[t - c]!;
+  } else {
     const b = lags[1]!;
     const psi = values[1]!;
     for (let t = from; t < to; t++) e[t] = w[t]! - phi * w[t - a]! - psi * w[t - b]!;
@@ -111,6 +88,13 @@ function filterMa(e: Float64Array, from: number, to: number, { lags, values }: S
       before = last;
       e[t] = last = now;
     }
+  } else if (count === 3 && lags[0] === 1) {
+    const b = lags[1]!;
+    const c = lags[2]!;
+    const second = values[1]!;
+    const third = values[2]!;
+    let last = e[from - 1]!;
+    for (let t = from; t < to; t++) e[t] = last = e[t]! - second * e[t - b]! - third * e[t - c]! - theta * last;
   } else if (lags[0] === 1) {
     let last = e[from - 1]!;
     for (let t = from; t < to; t++) {
