@@ -24,8 +24,9 @@ export function quantileByTails(tails: Tails, p: number, low: number, upper = fa
   if (p === 1) return upper ? low : Infinity;
   const useUpper = upper ? p <= 0.5 : p > 0.5;
   // 1 − p is exact for p ≥ ½, the only place it is used.
-  const target = Math.log(upper === useUpper ? p : 1 - p);
-  const height = (x: number) => (useUpper ? target - Math.log(tails.upperTail(x)) : Math.log(tails.cdf(x)) - target);
+  const share = upper === useUpper ? p : 1 - p;
+  // The logarithm of the ratio, not the difference of logarithms, which would round at the size of ln p.
+  const height = (x: number) => (useUpper ? -Math.log(tails.upperTail(x) / share) : Math.log(tails.cdf(x) / share));
   let width = 1;
   for (let i = 0; i < MOST_DOUBLINGS && height(low + width) < 0; i++) width *= 2;
   for (let i = 0; i < MOST_DOUBLINGS && height(low + width / 2) >= 0; i++) width /= 2;

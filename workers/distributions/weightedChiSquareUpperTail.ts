@@ -20,24 +20,36 @@ export function weightedChiSquareUpperTail(weights: ArrayLike<number>, x: number
   if (x <= 0) return 1;
   if (x === Infinity) return 0;
   const largest = Math.max(...given);
-  const w = Float64Array.from(given, (weight) => weight / largest);
+  const groups = grouped(given, largest);
   const limit = x / largest;
-  const mean = w.reduce((sum, weight) => sum + weight, 0);
-  const spread = Math.sqrt(w.reduce((sum, weight) => sum + 2 * weight * weight, 0));
-  const saddle = saddlePoint(w, limit);
+  const mean = groups.reduce((sum, { weight, count }) => sum + count * weight, 0);
+  const spread = Math.sqrt(groups.reduce((sum, { weight, count }) => sum + 2 * count * weight * weight, 0));
+  const saddle = saddlePoint(groups, limit, given.length);
   // The path keeps a deviation's distance from the pole at 0, on its own side of it.
-  if (limit >= mean) return alongPath(w, limit, Math.max(saddle, Math.min(1 / spread, 0.25)));
-  return 1 - alongPath(w, limit, Math.min(saddle, -1 / spread));
+  if (limit >= mean) return alongPath(groups, limit, Math.max(saddle, Math.min(1 / spread, 0.25)));
+  return 1 - alongPath(groups, limit, Math.min(saddle, -1 / spread));
+}
+
+/** A weight, the largest being 1, and how often it occurs. */
+interface Group {
+  readonly weight: number;
+  readonly count: number;
+}
+
+function grouped(given: readonly number[], largest: number): Group[] {
+  const counts = new Map<number, number>();
+  for (const value of given) counts.set(value / largest, (counts.get(value / largest) ?? 0) + 1);
+  return Array.from(counts, ([weight, count]) => ({ weight, count }));
 }
 
 /** s < ½ with K′(s) = Σ w/(1 − 2ws) = x, K = ln M, by bisection on z = ½ − s: K′ falls in z. */
-function saddlePoint(w: Float64Array, x: number): number {
+function saddlePoint(groups: readonly Group[], x: number, total: number): number {
   let low = 0;
-  let high = (0.5 * w.length) / x + 0.5;
+  let high = (0.5 * total) / x + 0.5;
   for (let i = 0; i < 60; i++) {
     const z = 0.5 * (low + high);
     let slope = 0;
-    for (const weight of w) slope += weight / (1 - weight + 2 * weight * z);
+    for (const { weight, count } of groups) slope += (count * weight) / (1 - weight + 2 * weight * z);
     if (slope > x) low = z;
     else high = z;
   }
@@ -45,14 +57,14 @@ function saddlePoint(w: Float64Array, x: number): number {
 }
 
 /** |1/2πi ∫ M(s) e^{−sx}/s ds| on s = ½ − z₀(1 + iνu)², which crosses the real axis at c, z₀ = ½ − c. */
-function alongPath(w: Float64Array, x: number, c: number): number {
+function alongPath(groups: readonly Group[], x: number, c: number): number {
   const start = 0.5 - c;
   let curvature = 0;
   let height = -c * x;
-  for (const weight of w) {
+  for (const { weight, count } of groups) {
     const rest = 1 - 2 * weight * c;
-    curvature += 2 * (weight / rest) ** 2;
-    height -= 0.5 * Math.log(rest);
+    curvature += 2 * count * (weight / rest) ** 2;
+    height -= 0.5 * count * Math.log(rest);
   }
   // Scaled so that the integrand is near exp(−u²/2) at the saddle.
   const turn = 1 / (2 * start * Math.sqrt(curvature));
@@ -63,11 +75,11 @@ function alongPath(w: Float64Array, x: number, c: number): number {
     const im = -2 * start * v;
     let size = -re * x - height;
     let angle = -im * x;
-    for (const weight of w) {
+    for (const { weight, count } of groups) {
       const restRe = 1 - 2 * weight * re;
       const restIm = -2 * weight * im;
-      size -= 0.25 * Math.log(restRe * restRe + restIm * restIm);
-      angle -= 0.5 * Math.atan2(restIm, restRe);
+      size -= 0.25 * count * Math.log(restRe * restRe + restIm * restIm);
+      angle -= 0.5 * count * Math.atan2(restIm, restRe);
     }
     // ds/du / (2πi s) = −z₀ν(1 + iνu)/(π s), and its mirror image below the axis.
     const square = re * re + im * im;
