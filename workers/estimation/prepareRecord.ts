@@ -94,7 +94,8 @@ export function prepareRecord(request: PrepareRequest): Result<PreparedRecord> {
   const spread = rootMeanSquare(differencing.length > 1 ? differenceRecord(centred, differencing) : centred);
   const scale = spread > 0 ? spread : 1;
   const columnCentres = columns.map((column, i) =>
-    takesCentre && !(i === 0 && candidate.level !== 'none') ? observedMean(column) : 0,
+    // Over the readings there are: what happens in a gap alone is nothing then, not a constant.
+    takesCentre && !(i === 0 && candidate.level !== 'none') ? observedMean(seenBy(record, column)) : 0,
   );
   const columnScales: number[] = [];
   for (let i = 0; i < columns.length; i++) {
@@ -168,6 +169,11 @@ function observedMean(values: Float64Array): number {
   return first + rest / count;
 }
 
+/** A column where the record has readings, NaN elsewhere. */
+function seenBy(record: Float64Array, column: Float64Array): Float64Array {
+  return column.map((value, t) => (Number.isNaN(record[t]!) ? NaN : value));
+}
+
 function rootMeanSquare(values: Float64Array): number {
   let sum = 0;
   let count = 0;
@@ -187,15 +193,15 @@ function firstDependent(
 ): { index: number; reason: 'collinear' | 'inGap' } | null {
   const basis: Float64Array[] = [];
   for (let index = 0; index < columns.length; index++) {
-    const masked = columns[index]!.map((value, t) => (Number.isNaN(record[t]!) ? NaN : value));
+    const masked = seenBy(record, columns[index]!);
     const seen = differencing.length > 1 ? differenceRecord(masked, differencing) : masked;
     // With gaps a differenced column is judged where its differences are observed; the filter uses more.
     const rest = seen.map((value) => (Number.isNaN(value) ? 0 : value));
     const whole = rootMeanSquare(rest);
-    if (!(whole > NOTHING))
-      return differencing.length > 1 && !masked.every((value) => !(Math.abs(value) > 0))
-        ? null
-        : { index, reason: 'inGap' };
+    if (!(whole > NOTHING)) {
+      if (masked.every((value) => !(Math.abs(value) > 0))) return { index, reason: 'inGap' };
+      continue;
+    }
     for (let pass = 0; pass < 2; pass++) {
       for (const unit of basis) {
         let along = 0;
