@@ -1,7 +1,6 @@
 import type { Result } from '../contract/result.ts';
 import { expandPolynomials } from '../model/expandPolynomials.ts';
 import { GapFilter } from './engine/gapFilter.ts';
-import { RunningStart } from './engine/runningStart.ts';
 import { residualRecord, type ResidualRequest } from './residualRecord.ts';
 
 /** Innovations of a model held at given parameters, as long as the record; NaN where there is none. */
@@ -13,8 +12,8 @@ export interface FilteredInnovations {
 /**
  * Exact (finite-sample) one-step-ahead errors with their own standard deviations, on the scale of the model.
  *
- * Method: the Kalman filter with the stationary start; with differencing the starting values are estimated by least squares from
- * the readings before each time, so that a reading spent on one has no innovation. Without gaps these are the innovations of the
+ * Method: the Kalman filter with the stationary start; with differencing its flat start, so that a reading spent on a starting
+ * value has no innovation. Without gaps these are the innovations of the
  * differenced record, and −½ Σ (ln 2πs² + e²/s²) is the exact ln L.
  *
  * @param request the record, a checked candidate, its parameters; window, covariates, λ
@@ -27,14 +26,10 @@ export function filterInnovations(request: ResidualRequest): Result<FilteredInno
   const { ar, ma } = expandPolynomials(request.at, request.candidate.order.s);
   const nothing = () => new Float64Array(request.values.length).fill(NaN);
   const found = { values: nothing(), standardDeviations: nothing() };
-  const start = new RunningStart(differencing.length - 1);
   const filter = new GapFilter([residual], ar.length, ma.length, differencing, (t, errors, variance, seen) => {
-    if (!seen) return;
-    const known = start.predict(errors, variance);
-    start.learn(errors, variance);
-    if (known === null) return;
-    found.values[from + t] = known.error * sigma;
-    found.standardDeviations[from + t] = sigma * Math.sqrt(known.variance);
+    if (!seen || variance === Infinity) return;
+    found.values[from + t] = errors[0]! * sigma;
+    found.standardDeviations[from + t] = sigma * Math.sqrt(variance);
   });
   if (!filter.evaluate(ar, ma))
     return { ok: false, failure: { code: 'badCandidate', field: 'ar', reason: 'nonstationary' } };

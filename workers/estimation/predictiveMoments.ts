@@ -1,7 +1,6 @@
 import type { Result } from '../contract/result.ts';
 import { expandPolynomials } from '../model/expandPolynomials.ts';
 import { GapFilter } from './engine/gapFilter.ts';
-import { RunningStart } from './engine/runningStart.ts';
 import { residualRecord, type ResidualRequest } from './residualRecord.ts';
 
 /** Mean and standard deviation of readings after the end of the record, on the scale of the model. */
@@ -14,8 +13,7 @@ export interface PredictiveMoments {
 /**
  * Exact finite-sample predictions of the readings 1…horizon after the end of the record.
  *
- * Method: the horizon is a run of gaps for the Kalman filter; with differencing the starting values come from all readings by least
- * squares. A phase of the season that was never observed cannot be predicted and is NaN.
+ * Method: the horizon is a run of gaps for the Kalman filter; with differencing its flat start. A phase of the season that was never observed cannot be predicted and is NaN.
  *
  * @param request the record, a checked candidate, its parameters, horizon ≥ 1; covariates continued over the horizon
  * @returns moments on the transformed scale; failures as `residualRecord`
@@ -29,15 +27,11 @@ export function predictiveMoments(request: ResidualRequest & { readonly horizon:
   const expected = new Float64Array(horizon).fill(NaN);
   const standardError = new Float64Array(horizon).fill(NaN);
   const first = residual.length - horizon;
-  const start = new RunningStart(differencing.length - 1);
-  const filter = new GapFilter([residual], ar.length, ma.length, differencing, (t, errors, variance, seen) => {
-    if (seen) start.learn(errors, variance);
-    if (t < first) return;
-    const known = start.predict(errors, variance);
-    if (known === null) return;
+  const filter = new GapFilter([residual], ar.length, ma.length, differencing, (t, errors, variance) => {
+    if (t < first || variance === Infinity) return;
     // In a gap the errors are those of a reading of zero: the prediction with its sign turned.
-    expected[t - first] = taken[t]! - known.error * sigma;
-    standardError[t - first] = sigma * Math.sqrt(known.variance);
+    expected[t - first] = taken[t]! - errors[0]! * sigma;
+    standardError[t - first] = sigma * Math.sqrt(variance);
   });
   if (!filter.evaluate(ar, ma))
     return { ok: false, failure: { code: 'badCandidate', field: 'ar', reason: 'nonstationary' } };

@@ -1,119 +1,173 @@
 import { sparsePolynomial, type SparsePolynomial } from '../../model/expandPolynomials.ts';
-import type { Engine } from './engine.ts';
+import { integratedAr } from '../../model/integratedAr.ts';
 import { dot } from './fastEngine.ts';
+import type { Engine } from './engine.ts';
+import { PredictorCovariance } from './predictorCovariance.ts';
 import { startCovariance } from './startCovariance.ts';
+import { StartingDirections } from './startingDirections.ts';
 import { steadyStretch } from './steadyRecursion.ts';
 
-/** Below this the covariance of the predictor state is nothing beside the unit innovation variance. */
-const NOTHING = 1e-20;
+/**
+ * Called at every step with its index, the errors of all series (in a gap those of a reading of zero), their variance for unit σ²
+ * (Infinity where starting values that no reading has fixed yet enter), and whether the reading was seen.
+ */
+export type FilterSink = (t: number, errors: Float64Array, variance: number, seen: boolean) => void;
 
 /**
  * The Kalman filter, for records with gaps and for differencing across gaps.
  *
- * State: with w the ARMA part in its innovations form, w_t = s_1 + e_t, s ← [φ | shift] s + (φ+θ) e, and for d + sD = m₀ > 0 the last m₀ values
- * of the record, y_t = w_t − Σ c_i y_{t−i}. Written with T̃ = T − RZ the covariance of the state after an observed value
- * is T̃ P⁺ T̃′ with no noise term, so that it falls to exactly nothing where the past is known and the filter is then the steady
- * recursion; F − 1 is read off without cancellation.
- *
- * Start: the exact stationary covariance of the ARMA part; the m₀ values before the record have a flat prior, carried as
- * m₀ columns with unit starting values (Rosenberg 1973; Ansley & Kohn 1985, Ann. Stat. 13, 1286–1316; de Jong 1991), which the caller integrates
- * out. Gaps are steps without a measurement: nothing is interpolated.
+ * State: what the past puts into the readings ahead, with the differencing multiplied into the AR part, so that its length is
+ * max(p + d + sD, q) (see `PredictorCovariance`). Start: the exact stationary covariance of the ARMA part, and a flat prior on the d + sD values
+ * before the record (see `StartingDirections`). Gaps are steps without a reading: nothing is interpolated. Once the past is known
+ * to rounding the filter is the steady recursion up to the next gap.
  */
 export class GapFilter implements Engine {
   readonly kind: 'filter' | 'diffuse';
-  readonly flat: number;
+  readonly flat = 0;
   readonly count: number;
   readonly cross: Float64Array;
   readonly observed: number;
   logDeterminant = 0;
   private readonly m: number;
-  private readonly r: number;
   private readonly present: Uint8Array;
-  /** States of all series, one row each. */
-  private readonly state: Float64Array;
-  private readonly P: Float64Array;
-  private readonly next: Float64Array;
-  private readonly input: Float64Array;
-  /** First column of the transition at hand: φ over a gap, −θ where the value was seen. */
-  private readonly lead: Float64Array;
-  private readonly row: Float64Array;
+  /** State of each series, by place. */
+  private readonly states: readonly Float64Array[];
+  private readonly covariance: PredictorCovariance;
+  private readonly directions: StartingDirections;
   private readonly errors: Float64Array;
   private innovations: Float64Array[] | null = null;
-  private readonly known: number[];
 
   /**
    * @param series the record (gaps as NaN) and its columns (no gaps), not differenced, all of length n
    * @param p degree of the multiplied-out AR polynomial; @param q of the MA polynomial
    * @param differencing c_0…c_m₀ of the differencing polynomial
-   * @param sink called at every step with its index, the errors of all series (in a gap those of a reading of zero), their
-   *   variance for unit σ², and whether the reading was seen
    */
   constructor(
     private readonly series: readonly Float64Array[],
     p: number,
     q: number,
     private readonly differencing: Float64Array,
-    private readonly sink: ((t: number, errors: Float64Array, variance: number, seen: boolean) => void) | null = null,
+    private readonly sink: FilterSink | null = null,
   ) {
     const record = series[0]!;
     this.present = Uint8Array.from(record, (value) => (Number.isNaN(value) ? 0 : 1));
     this.observed = this.present.reduce((sum, one) => sum + one, 0);
-    this.flat = differencing.length - 1;
-    this.kind = this.flat > 0 ? 'diffuse' : 'filter';
-    this.m = Math.max(p, q, 1);
-    this.r = this.m + this.flat;
-    this.count = series.length + this.flat;
+    const starting = differencing.length - 1;
+    this.kind = starting > 0 ? 'diffuse' : 'filter';
+    this.m = Math.max(p + starting, q, 1);
+    this.count = series.length;
     this.cross = new Float64Array(this.count ** 2);
-    this.state = new Float64Array(this.count * this.r);
-    this.P = new Float64Array(this.r ** 2);
-    this.next = new Float64Array(this.r ** 2);
-    this.input = new Float64Array(this.m);
-    this.lead = new Float64Array(this.m);
-    this.row = new Float64Array(this.r);
+    this.states = series.map(() => new Float64Array(this.m));
+    this.covariance = new PredictorCovariance(this.m);
+    this.directions = new StartingDirections(this.m, differencing);
     this.errors = new Float64Array(this.count);
-    this.known = [];
-    for (let i = 1; i <= this.flat; i++) if (differencing[i] !== 0) this.known.push(i);
   }
 
   evaluate(ar: Float64Array, ma: Float64Array): boolean {
-    const { m, r, P, state, input, count, flat } = this;
-    this.cross.fill(0);
-    this.logDeterminant = 0;
-    P.fill(0);
-    state.fill(0);
-    for (let i = 0; i < m; i++) input[i] = (ar[i] ?? 0) + (ma[i] ?? 0);
-    const order = Math.max(ar.length, ma.length);
-    if (order > 0) {
-      const start = new Float64Array(order ** 2);
-      if (!startCovariance(ar, ma, order, start)) return false;
-      for (let i = 0; i < order; i++) for (let j = 0; j < order; j++) P[i * r + j] = start[i * order + j]!;
-    }
-    // Column 1…flat: the values before the record, the latest first.
-    for (let k = 0; k < flat; k++) state[(1 + k) * r + m + k] = 1;
-    const sparse = [sparsePolynomial(ar), sparsePolynomial(ma)] as const;
+    const { covariance, directions, count, errors, cross } = this;
+    const alpha = sparsePolynomial(integratedAr(ar, this.differencing));
+    const theta = sparsePolynomial(ma);
+    if (!this.begin(ar, ma)) return false;
+    const noise = sparsePolynomial(sum(alpha, theta, this.m));
     let settled = false;
     for (let t = 0; t < this.present.length; t++) {
-      if (settled && this.sink === null && flat === 0) {
-        t = this.stretch(t, ...sparse);
+      if (settled && this.sink === null) {
+        t = this.stretch(t, alpha, theta);
         if (t === this.present.length) break;
       }
       const seen = this.present[t] === 1;
-      const variance = settled ? 1 : this.predictVariance();
-      this.predictErrors(t, seen);
-      if (seen) {
-        if (variance !== 1) this.logDeterminant += Math.log(variance);
-        for (let i = 0; i < count; i++)
-          for (let j = 0; j <= i; j++) this.cross[i * count + j]! += (this.errors[i]! * this.errors[j]!) / variance;
+      const { head } = covariance;
+      for (let i = 0; i < count; i++) {
+        const value = i === 0 && !seen ? 0 : this.series[i]![t]!;
+        errors[i] = value - this.states[i]![head]!;
       }
-      this.sink?.(t, this.errors, variance, seen);
-      this.stepStates(ar, t, seen, settled ? null : variance);
-      if (settled && seen) continue;
-      if (seen) this.stepSeen(ma, variance);
-      else this.stepGap(ar);
-      settled = seen && this.isNothing();
+      if (settled && seen) {
+        this.add(1);
+        this.sink?.(t, errors, 1, true);
+        this.moveStates(t, alpha, theta, null, 0);
+        covariance.head = (head + 1) % this.m;
+        continue;
+      }
+      const variance = covariance.look();
+      if (!seen) {
+        this.sink?.(t, errors, directions.left > 0 && directions.enter(head) ? Infinity : variance, false);
+        this.passStates(alpha);
+        directions.pass(head, alpha);
+        covariance.pass(alpha, noise);
+        settled = false;
+        continue;
+      }
+      const fixed = directions.left > 0 ? directions.fix(head) : null;
+      if (fixed !== null) {
+        this.logDeterminant += 2 * fixed.logEffect;
+        this.sink?.(t, errors, Infinity, true);
+        this.moveStates(t, alpha, theta, fixed.direction, 1);
+        covariance.spend(fixed.direction, theta);
+        continue;
+      }
+      this.logDeterminant += Math.log(variance);
+      this.add(variance);
+      this.sink?.(t, errors, variance, true);
+      this.moveStates(t, alpha, theta, covariance.row, variance);
+      covariance.see(variance, theta);
+      settled = directions.left === 0 && covariance.isNothing();
+      if (settled) covariance.forget();
     }
-    for (let i = 0; i < count; i++) for (let j = 0; j < i; j++) this.cross[j * count + i] = this.cross[i * count + j]!;
+    for (let i = 0; i < count; i++) for (let j = 0; j < i; j++) cross[j * count + i] = cross[i * count + j]!;
     return true;
+  }
+
+  private begin(ar: Float64Array, ma: Float64Array): boolean {
+    this.cross.fill(0);
+    this.logDeterminant = 0;
+    for (const state of this.states) state.fill(0);
+    const order = Math.max(ar.length, ma.length);
+    const start = new Float64Array(order ** 2);
+    if (order > 0 && !startCovariance(ar, ma, order, start)) return false;
+    this.covariance.start(start, order);
+    this.directions.begin(sparsePolynomial(ar));
+    return true;
+  }
+
+  private add(variance: number): void {
+    const { count, cross, errors } = this;
+    for (let i = 0; i < count; i++)
+      for (let j = 0; j <= i; j++) cross[i * count + j]! += (errors[i]! * errors[j]!) / variance;
+  }
+
+  /** States over a reading: first the gain (none in the steady state), then shift + α y + θ e. */
+  private moveStates(
+    t: number,
+    alpha: SparsePolynomial,
+    theta: SparsePolynomial,
+    gain: Float64Array | null,
+    variance: number,
+  ): void {
+    const { count, states, series, errors, m } = this;
+    const { head } = this.covariance;
+    for (let i = 0; i < count; i++) {
+      const state = states[i]!;
+      if (gain !== null) {
+        const step = errors[i]! / variance;
+        for (let b = 0; b < m; b++) state[b]! += gain[b]! * step;
+      }
+      const value = series[i]![t]!;
+      const shock = value - state[head]!;
+      state[head] = 0;
+      for (let k = 0; k < alpha.lags.length; k++) state[(head + alpha.lags[k]!) % m]! += alpha.values[k]! * value;
+      for (let k = 0; k < theta.lags.length; k++) state[(head + theta.lags[k]!) % m]! += theta.values[k]! * shock;
+    }
+  }
+
+  /** States over a gap: shift + α s_1. */
+  private passStates(alpha: SparsePolynomial): void {
+    const { m } = this;
+    const { head } = this.covariance;
+    for (const state of this.states) {
+      const value = state[head]!;
+      state[head] = 0;
+      for (let k = 0; k < alpha.lags.length; k++) state[(head + alpha.lags[k]!) % m]! += alpha.values[k]! * value;
+    }
   }
 
   /**
@@ -121,159 +175,45 @@ export class GapFilter implements Engine {
    *
    * @returns the place of the gap, or the end
    */
-  private stretch(from: number, ar: SparsePolynomial, ma: SparsePolynomial): number {
-    const { present, count, series, m } = this;
+  private stretch(from: number, alpha: SparsePolynomial, theta: SparsePolynomial): number {
+    const { present, count, series, m, states, covariance } = this;
     let to = from;
     while (to < present.length && present[to] === 1) to++;
     if (to === from) return to;
     this.innovations ??= series.map((one) => new Float64Array(one.length));
     const filtered = this.innovations;
     for (let i = 0; i < count; i++) {
-      const w = series[i]!;
+      const y = series[i]!;
       const e = filtered[i]!;
-      const s = this.state.slice(i * m, (i + 1) * m);
-      const head = Math.min(to, from + m);
-      for (let t = from; t < head; t++) {
-        let value = w[t]! - s[t - from]!;
-        for (let k = 0; k < ar.lags.length && ar.lags[k]! <= t - from; k++)
-          value -= ar.values[k]! * w[t - ar.lags[k]!]!;
-        for (let k = 0; k < ma.lags.length && ma.lags[k]! <= t - from; k++)
-          value -= ma.values[k]! * e[t - ma.lags[k]!]!;
-        e[t] = value;
-      }
-      if (head < to) steadyStretch(w, e, head, to, ar, ma);
-      for (let j = 0; j < m; j++) {
-        let value = s[to - from + j] ?? 0;
-        // Lag l puts the value at to + j − l into place j ahead.
-        for (let k = 0; k < ar.lags.length; k++) {
-          const at = to + j - ar.lags[k]!;
-          if (at < to && at >= from) value += ar.values[k]! * w[at]!;
-        }
-        for (let k = 0; k < ma.lags.length; k++) {
-          const at = to + j - ma.lags[k]!;
-          if (at < to && at >= from) value += ma.values[k]! * e[at]!;
-        }
-        this.state[i * m + j] = value;
-      }
+      const state = states[i]!;
+      const left = Float64Array.from({ length: m }, (_, j) => state[(covariance.head + j) % m]!);
+      const turn = Math.min(to, from + m);
+      for (let t = from; t < turn; t++)
+        e[t] = y[t]! - left[t - from]! - within(alpha, y, t, from, t) - within(theta, e, t, from, t);
+      if (turn < to) steadyStretch(y, e, turn, to, alpha, theta);
+      for (let j = 0; j < m; j++)
+        state[j] = (left[to - from + j] ?? 0) + within(alpha, y, to + j, from, to) + within(theta, e, to + j, from, to);
     }
+    covariance.head = 0;
     for (let i = 0; i < count; i++)
       for (let j = 0; j <= i; j++) this.cross[i * count + j]! += dot(filtered[i]!, filtered[j]!, from, to);
     return to;
   }
+}
 
-  /** z′P into `row` and z′Pz + 1 back: z picks s_1 and −c_i of the last values. */
-  private predictVariance(): number {
-    const { P, r, m, row, known, differencing } = this;
-    for (let j = 0; j < r; j++) row[j] = P[j]!;
-    for (const i of known) {
-      const c = differencing[i]!;
-      const base = (m + i - 1) * r;
-      for (let j = 0; j < r; j++) row[j]! -= c * P[base + j]!;
-    }
-    let sum = row[0]!;
-    for (const i of known) sum -= differencing[i]! * row[m + i - 1]!;
-    return 1 + Math.max(sum, 0);
+/** Σ values_k x_{t − lag_k} over the terms that lie in [from, to). */
+function within({ lags, values }: SparsePolynomial, x: Float64Array, t: number, from: number, to: number): number {
+  let sum = 0;
+  for (let k = 0; k < lags.length; k++) {
+    const at = t - lags[k]!;
+    if (at >= from && at < to) sum += values[k]! * x[at]!;
   }
+  return sum;
+}
 
-  private predictErrors(t: number, seen: boolean): void {
-    const { state, r, m, flat, count, errors, known, differencing, series } = this;
-    for (let i = 0; i < count; i++) {
-      let forecast = state[i * r]!;
-      for (const k of known) forecast -= differencing[k]! * state[i * r + m + k - 1]!;
-      const source = i === 0 ? series[0]! : i > flat ? series[i - flat]! : null;
-      errors[i] = (source === null || (i === 0 && !seen) ? 0 : source[t]!) - forecast;
-    }
-  }
-
-  /** States one step on; `variance` null in the steady state, where the gain is the input alone. */
-  private stepStates(ar: Float64Array, t: number, seen: boolean, variance: number | null): void {
-    const { state, r, m, flat, count, errors, row, input, known, differencing } = this;
-    for (let i = 0; i < count; i++) {
-      const base = i * r;
-      const gain = seen && variance !== null ? errors[i]! / variance : 0;
-      if (gain !== 0) for (let j = 0; j < r; j++) state[base + j]! += row[j]! * gain;
-      const first = state[base]!;
-      let value = first;
-      for (const k of known) value -= differencing[k]! * state[base + m + k - 1]!;
-      // The innovation left after filtering: e = y − z′s⁺ where the value was seen, 0 in a gap.
-      const source = i === 0 ? this.series[0]! : i > flat ? this.series[i - flat]! : null;
-      const shock = seen ? (source === null ? 0 : source[t]!) - value : 0;
-      for (let j = 0; j < m; j++) {
-        const ahead = j + 1 < m ? state[base + j + 1]! : 0;
-        state[base + j] = ahead + (ar[j] ?? 0) * first + input[j]! * shock;
-      }
-      for (let j = flat - 1; j > 0; j--) state[base + m + j] = state[base + m + j - 1]!;
-      if (flat > 0) state[base + m] = value + shock;
-    }
-  }
-
-  /** P ← T̃ (P − P z z′ P / F) T̃′: the step after an observed value, without noise. */
-  private stepSeen(ma: Float64Array, variance: number): void {
-    const { P, r, row } = this;
-    for (let i = 0; i < r; i++) {
-      const scaled = row[i]! / variance;
-      for (let j = 0; j < r; j++) P[i * r + j]! -= scaled * row[j]!;
-    }
-    for (let j = 0; j < this.m; j++) this.lead[j] = -(ma[j] ?? 0);
-    this.transform(true);
-  }
-
-  /** P ← T P T′ + R R′: the step over a gap. */
-  private stepGap(ar: Float64Array): void {
-    const { r, m, input, flat } = this;
-    for (let j = 0; j < m; j++) this.lead[j] = ar[j] ?? 0;
-    this.transform(false);
-    const { P } = this;
-    for (let i = 0; i < m; i++) for (let j = 0; j < m; j++) P[i * r + j]! += input[i]! * input[j]!;
-    if (flat === 0) return;
-    // The value in the gap is s_1 − Σ c y + e: its own noise and that shared with the ARMA part.
-    P[m * r + m]! += 1;
-    for (let i = 0; i < m; i++) {
-      P[i * r + m]! += input[i]!;
-      P[m * r + i]! += input[i]!;
-    }
-  }
-
-  /**
-   * P ← A P A′ with the ARMA rows A s = lead·s_1 + shift (where the value was seen T̃ = T − R z′, whose rows take R times
-   * the whole of z′), and the remembered values shifted with the new one in front.
-   */
-  private transform(seen: boolean): void {
-    const { r } = this;
-    const half = this.next;
-    for (let i = 0; i < r; i++) this.applyRow(this.P, i * r, 1, half, i * r, seen);
-    for (let j = 0; j < r; j++) this.applyRow(half, j, r, this.P, j, seen);
-  }
-
-  /** Applies A to one vector laid out with a stride. */
-  private applyRow(
-    source: Float64Array,
-    from: number,
-    stride: number,
-    target: Float64Array,
-    to: number,
-    seen: boolean,
-  ): void {
-    const { m, flat, known, differencing, input, lead } = this;
-    const first = source[from]!;
-    let past = 0;
-    for (const k of known) past -= differencing[k]! * source[from + (m + k - 1) * stride]!;
-    for (let j = 0; j < m; j++) {
-      const ahead = j + 1 < m ? source[from + (j + 1) * stride]! : 0;
-      // Seen: T̃ s = φ s_1 + shift − R (s_1 + past) = −θ s_1 + shift − R past.
-      target[to + j * stride] = ahead + lead[j]! * first - (seen ? input[j]! * past : 0);
-    }
-    if (flat === 0) return;
-    const remembered = seen ? 0 : first + past;
-    for (let j = flat - 1; j > 0; j--) target[to + (m + j) * stride] = source[from + (m + j - 1) * stride]!;
-    target[to + m * stride] = remembered;
-  }
-
-  private isNothing(): boolean {
-    const { P, r } = this;
-    for (let i = 0; i < r; i++) {
-      if (P[i * r + i]! > NOTHING) return false;
-    }
-    return true;
-  }
+function sum(one: SparsePolynomial, other: SparsePolynomial, m: number): Float64Array {
+  const result = new Float64Array(m);
+  for (const { lags, values } of [one, other])
+    for (let k = 0; k < lags.length; k++) result[lags[k]! - 1]! += values[k]!;
+  return result;
 }
