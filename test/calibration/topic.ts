@@ -16,6 +16,8 @@ export interface Topic<Design = unknown, Outcome = unknown> {
   /** How many replicates of each design are run when the command does not say. */
   readonly replicates: number;
   readonly designs: readonly Design[];
+  /** Part of the replicates that a design is run with, where it is not all of them. */
+  readonly share?: (design: Design) => number;
   /** A short name of the design for the progress line. */
   describe(design: Design): string;
   /** One replicate: simulates and measures. */

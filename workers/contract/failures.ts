@@ -34,6 +34,17 @@ export type Failure =
   | { readonly code: 'searchFailed'; readonly starts: number }
   | { readonly code: 'noAdmissibleMaximum'; readonly logLikelihood: number }
   | { readonly code: 'startingValuesLost'; readonly observed: number; readonly needed: number }
+  /** Intervals from the likelihood need a fit by the exact likelihood. */
+  | { readonly code: 'intervalsNotExact'; readonly estimator: string }
+  /** Too few of the parameter points carried weight to tell an interval from them. */
+  | {
+      readonly code: 'intervalsUnreliable';
+      readonly effectiveSize: number;
+      readonly needed: number;
+      readonly drawn: number;
+    }
+  /** A parameter that the fit does not have. */
+  | { readonly code: 'noSuchParameter'; readonly name: string }
   | LinkFailure
   | ReadingFailure;
 
