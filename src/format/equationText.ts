@@ -1,6 +1,8 @@
 import type { Equation } from '../../workers/contract/diagnostics.ts';
 import type { SignConvention } from '../../workers/contract/envelope.ts';
 import type { Fit } from '../../workers/contract/fit.ts';
+import type { IntegratedIntervals, Interval } from '../../workers/contract/uncertainty.ts';
+import { intervalEnds } from './intervalText.ts';
 import { coefficientName } from './notation.ts';
 import { formatNumber, formatWithUncertainty, subscript, superscript } from './numbers.ts';
 
@@ -9,7 +11,11 @@ export interface EstimateLine {
   readonly name: string;
   readonly value: string;
   readonly uncertainty: string;
+  /** The interval that holds near boundaries too; empty where there is none. */
+  readonly interval: string;
   readonly unit: string;
+  /** Its name in the fit; null for σ and the constant, which follow from others. */
+  readonly about: string | null;
 }
 
 /** What a convention does to a stored coefficient: stored signs are z_t = Σ φz + e_t + Σ θe. */
@@ -28,8 +34,28 @@ export function signSentence(signs: SignConvention): string {
   }[signs];
 }
 
-/** Estimates in the order of the fit, then the constant and σ; a value is rounded to its uncertainty. */
-export function estimateLines(fit: Fit, equation: Equation, signs: SignConvention, unit: string): EstimateLine[] {
+/** An interval in the sign convention in use. */
+export function intervalShown(
+  name: string,
+  signs: SignConvention,
+  interval: Pick<Interval, 'lower' | 'upper'>,
+): string {
+  const { lower, upper } = interval;
+  return shownSign(name, signs) === 1 ? intervalEnds(lower, upper) : intervalEnds(-upper, -lower);
+}
+
+/**
+ * Estimates in the order of the fit, then the constant and σ; a value is rounded to its uncertainty.
+ *
+ * @param intervals null before they are known, or where there are none
+ */
+export function estimateLines(
+  fit: Fit,
+  equation: Equation,
+  signs: SignConvention,
+  unit: string,
+  intervals: IntegratedIntervals | null = null,
+): EstimateLine[] {
   const { parameters, names, standardErrors } = fit;
   const free = (values: readonly number[], held: readonly number[]) => values.filter((_, i) => !held.includes(i + 1));
   const { zeroLags, level, order } = fit.candidate;
@@ -42,19 +68,44 @@ export function estimateLines(fit: Fit, equation: Equation, signs: SignConventio
     ...parameters.regression,
   ];
   const lines = names.map((name, i): EstimateLine => {
-    const shown = formatWithUncertainty(shownSign(name, signs) * values[i]!, standardErrors?.[i] ?? null);
+    const interval = intervals?.coefficients[i];
+    const spread = standardErrors?.[i] ?? (interval === undefined ? null : (interval.upper - interval.lower) / 4);
+    const { value } = formatWithUncertainty(shownSign(name, signs) * values[i]!, spread);
+    const { uncertainty } = formatWithUncertainty(values[i]!, standardErrors?.[i] ?? null);
     const ofLevel = name === 'mean' || name === 'drift';
     return {
       name: coefficientName(name),
-      ...shown,
+      value,
+      uncertainty,
+      interval: interval === undefined ? '' : intervalShown(name, signs, interval),
+      about: name,
       unit: ofLevel ? (name === 'drift' ? `${unit} per step`.trim() : unit) : '',
     };
   });
   const tail: EstimateLine[] = [];
   if (level !== 'none' && order.p + order.P > 0)
-    tail.push({ name: 'constant', value: formatNumber(equation.constant, 5), uncertainty: '', unit });
-  tail.push({ name: 'σ', value: formatNumber(Math.sqrt(parameters.innovationVariance), 4), uncertainty: '', unit });
+    tail.push(
+      derived(
+        'constant',
+        equation.constant,
+        5,
+        unit,
+        intervals?.derived.find(({ about }) => about === 'constant'),
+      ),
+    );
+  tail.push(derived('σ', Math.sqrt(parameters.innovationVariance), 4, unit, intervals?.sigma));
   return [...lines, ...tail];
+}
+
+function derived(
+  name: string,
+  value: number,
+  digits: number,
+  unit: string,
+  interval: Interval | undefined,
+): EstimateLine {
+  const ends = interval === undefined ? '' : intervalEnds(interval.lower, interval.upper);
+  return { name, value: formatNumber(value, digits), uncertainty: '', interval: ends, unit, about: null };
 }
 
 /** The fitted difference equation in numbers, then what its level is: mean and constant both named. */

@@ -148,6 +148,20 @@ export function failureText(failure: Failure): FailureText {
         '',
         'Difference less, or bring a longer record.',
       );
+    case 'intervalsNotExact':
+      return say(
+        'Intervals need a fit by the exact likelihood.',
+        failure.estimator,
+        'Choose the exact likelihood for this candidate.',
+      );
+    case 'intervalsUnreliable':
+      return say(
+        'No reliable interval: the parameter points that carry weight are too few.',
+        `${formatNumber(failure.drawn, 9)} points, worth ${formatNumber(Math.round(failure.effectiveSize), 9)}; ${failure.needed} are needed`,
+        'Choose lower orders, or check one parameter by simulation.',
+      );
+    case 'noSuchParameter':
+      return say('The fit has no such parameter.', failure.name, 'Fit the candidate again.');
     default:
       return isLinkFailure(failure) ? linkText(failure) : readingText(failure);
   }

@@ -28,6 +28,10 @@ export interface Actions {
   /** Asks for a prediction of the chosen candidate. */
   readonly predict: (horizon: number) => void;
 
+  /** Checks the interval of one parameter of the chosen candidate by simulation. */
+  readonly checkInterval: (about: string) => void;
+  readonly stopCheck: (about: string) => void;
+
   readonly changeView: (part: Partial<View>) => void;
   readonly undo: () => void;
   readonly redo: () => void;

@@ -7,6 +7,8 @@ import type { Fit } from '../../workers/contract/fit.ts';
 import type { Prediction } from '../../workers/contract/prediction.ts';
 import type { ReadAnswer, ReadRecord } from '../../workers/contract/reading.ts';
 import type { ComparisonGroup } from '../../workers/contract/selection.ts';
+import type { Result } from '../../workers/contract/result.ts';
+import type { IntegratedIntervals, InvertedInterval } from '../../workers/contract/uncertainty.ts';
 import type { Repair, Span } from '../../workers/contract/series.ts';
 
 /** How far a candidate row has come. `grey` is the result it had before the last edit, kept beside the new one. */
@@ -65,6 +67,20 @@ export interface Comparison {
   readonly groups: readonly ComparisonGroup[];
 }
 
+/** Intervals of one fit, which they belong to whatever row shows it. */
+export interface FitIntervals {
+  readonly fit: Fit;
+  readonly answer: Result<IntegratedIntervals>;
+}
+
+/** One parameter's interval checked by simulation; `answer` null while it is under way. */
+export interface IntervalCheck {
+  readonly fit: Fit;
+  readonly about: string;
+  readonly fraction: number;
+  readonly answer: Result<InvertedInterval> | null;
+}
+
 /** A message to the person; stays until dismissed. `failure` says what, where and what to do through `format`. */
 export interface Notice {
   readonly id: string;
@@ -86,6 +102,8 @@ export interface AppState {
   readonly comparison: Comparison;
   /** Prediction for the chosen candidate, or null where none was asked for yet. */
   readonly prediction: { readonly rowId: string; readonly fit: Fit; readonly prediction: Prediction } | null;
+  readonly intervals: readonly FitIntervals[];
+  readonly checks: readonly IntervalCheck[];
   /** True until an autosaved session or the link has been looked at. */
   readonly opening: boolean;
 }

@@ -22,5 +22,7 @@ export const initialState: AppState = {
   redoDepth: 0,
   comparison: { rowIds: [], groups: [] },
   prediction: null,
+  intervals: [],
+  checks: [],
   opening: true,
 };

@@ -1,6 +1,6 @@
-import type { Criteria } from '../../workers/contract/fit.ts';
+import type { Criteria, Fit } from '../../workers/contract/fit.ts';
 import type { ComparisonGroup } from '../../workers/contract/selection.ts';
-import type { AppState, Row } from './appState.ts';
+import type { AppState, FitIntervals, Row } from './appState.ts';
 import { activeRecord } from './updates.ts';
 
 export { activeRecord } from './updates.ts';
@@ -13,6 +13,11 @@ export function activeRows(state: AppState): readonly Row[] {
 
 export function chosenRow(state: AppState): Row | null {
   return activeRows(state)[state.view.chosen ?? -1] ?? null;
+}
+
+/** Intervals of a fit; null before they are known. */
+export function intervalsOf(state: AppState, fit: Fit | null): FitIntervals['answer'] | null {
+  return state.intervals.find((each) => each.fit === fit)?.answer ?? null;
 }
 
 /** How many rows of the active record have come how far. */

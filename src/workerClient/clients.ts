@@ -6,6 +6,12 @@ import type { Prediction, PredictRequest } from '../../workers/contract/predicti
 import type { ReadAnswer, ReadRequest } from '../../workers/contract/reading.ts';
 import type { Result } from '../../workers/contract/result.ts';
 import type { ComparisonGroup } from '../../workers/contract/selection.ts';
+import type {
+  IntegratedIntervals,
+  IntervalsRequest,
+  InversionRequest,
+  InvertedInterval,
+} from '../../workers/contract/uncertainty.ts';
 import type { ModellingApi, ReadingApi } from '../../workers/contract/workerApis.ts';
 import { failureOf, WorkerPool } from './workerPool.ts';
 
@@ -17,6 +23,12 @@ export interface CoreClient {
   diagnose(key: string, request: DiagnoseRequest): Promise<Result<Judgement>>;
   predict(key: string, request: PredictRequest): Promise<Result<Prediction>>;
   compare(key: string, fits: readonly Fit[]): Promise<Result<readonly ComparisonGroup[]>>;
+  intervals(key: string, request: IntervalsRequest): Promise<Result<IntegratedIntervals>>;
+  invert(
+    key: string,
+    request: InversionRequest,
+    progress: (fraction: number) => void,
+  ): Promise<Result<InvertedInterval>>;
   read(request: ReadRequest, progress: (fraction: number) => void): Promise<ReadAnswer>;
   abort(key: string): void;
   abortAll(): void;
@@ -44,6 +56,15 @@ export function createCoreClient(): CoreClient {
       safe(modelling.run<Result<Prediction>>(key, async (remote) => await remote.predict(request))),
     compare: (key, fits) =>
       safe(modelling.run<Result<readonly ComparisonGroup[]>>(key, async (remote) => await remote.compare(fits))),
+    intervals: (key, request) =>
+      safe(modelling.run<Result<IntegratedIntervals>>(key, async (remote) => await remote.intervals(request))),
+    invert: (key, request, progress) =>
+      safe(
+        modelling.run<Result<InvertedInterval>>(
+          key,
+          async (remote) => await remote.invert(request, Comlink.proxy(progress)),
+        ),
+      ),
     read: (request, progress) =>
       reading
         .run<ReadAnswer>('read', async (remote) => await remote.read(request, Comlink.proxy(progress)))

@@ -5,6 +5,7 @@ import type { Prediction, PredictRequest } from './prediction.ts';
 import type { ReadAnswer, ReadRequest } from './reading.ts';
 import type { Result } from './result.ts';
 import type { ComparisonGroup } from './selection.ts';
+import type { IntegratedIntervals, IntervalsRequest, InversionRequest, InvertedInterval } from './uncertainty.ts';
 
 /** Every worker answers `ready` once its code has loaded. */
 interface Readiness {
@@ -18,6 +19,10 @@ export interface ModellingApi extends Readiness {
   predict(request: PredictRequest): Result<Prediction>;
   /** Which of these fits may be compared by criteria, with differences and weights within each group. */
   compare(fits: readonly Fit[]): Result<readonly ComparisonGroup[]>;
+  /** Intervals that hold where an estimate ± 2 standard errors does not. */
+  intervals(request: IntervalsRequest): Result<IntegratedIntervals>;
+  /** The same for one parameter by simulation. `progress` is a Comlink proxy, called with 0…1. */
+  invert(request: InversionRequest, progress?: (fraction: number) => void): Result<InvertedInterval>;
 }
 
 /** `workers/entry/reading.worker.ts`: a file's text to a record. `progress` is a Comlink proxy, called with 0…1. */

@@ -5,6 +5,8 @@ import type { ModellingApi } from '../contract/workerApis.ts';
 import { fitCandidate } from '../estimation/fitCandidate.ts';
 import { predictRecord } from '../prediction/predictRecord.ts';
 import { comparisonGroups } from '../selection/comparisonGroups.ts';
+import { integratedIntervals } from '../uncertainty/integratedIntervals.ts';
+import { testInversion } from '../uncertainty/testInversion.ts';
 import { judgeFit } from '../verdict/judgeFit.ts';
 import { infinityIn } from './infinityIn.ts';
 import { ownBuffers } from './ownBuffers.ts';
@@ -15,8 +17,21 @@ export const modellingApi: ModellingApi = {
   fit: (request) => guarded(request, fitCandidate),
   diagnose: (request) => guarded(request, judgeFit),
   predict: (request) => guarded(request, predictRecord),
+  intervals: (request) => guarded(request, integratedIntervals),
+  invert: (request, progress) => guarded(request, (checked) => testInversion(checked, inSteps(progress))),
   compare: (fits) => guarded({}, () => ({ ok: true, value: comparisonGroups(fits) })),
 };
+
+/** Reports of a hundredth at a time: each one is a message to the page. */
+function inSteps(progress: ((fraction: number) => void) | undefined): (fraction: number) => void {
+  let said = -1;
+  return (fraction) => {
+    const now = Math.floor(fraction * 100);
+    if (now === said) return;
+    said = now;
+    progress?.(fraction);
+  };
+}
 
 interface Readings {
   readonly values?: Float64Array;

@@ -1,12 +1,22 @@
+import { coverageRows } from '../../format/measuredCoverage.ts';
+import { derivedLines, intervalAssumptions } from '../../format/intervalText.ts';
 import { formatInterval, formatReadings, formatSpan, timeAt } from '../../format/axisTime.ts';
 import { cautions } from '../../format/cautions.ts';
 import { noteSentence } from '../../format/dialectText.ts';
-import { equationLines, estimateLines, signSentence } from '../../format/equationText.ts';
-import { candidateName, estimatorName, levelName, orderNotation, transformName } from '../../format/notation.ts';
+import { equationLines, estimateLines, intervalShown, signSentence } from '../../format/equationText.ts';
+import {
+  candidateName,
+  coefficientName,
+  estimatorName,
+  levelName,
+  orderNotation,
+  transformName,
+} from '../../format/notation.ts';
 import { counted, formatFixed, formatNumber, formatWithUncertainty } from '../../format/numbers.ts';
 import { standingSentence, verdictSentence } from '../../format/verdictText.ts';
 import { warningText } from '../../format/warningText.ts';
-import type { Report, Section } from './report.ts';
+import { failureText } from '../../format/failureText.ts';
+import type { Block, Report, Section } from './report.ts';
 import type { ReportInput } from './reportInput.ts';
 import { readingFacts } from './readingFacts.ts';
 
@@ -77,7 +87,9 @@ function recordSection(input: ReportInput): Section {
   };
 }
 
-function modelSection({ fit, judgement, view, record }: ReportInput): Section {
+function modelSection(input: ReportInput): Section {
+  const { fit, judgement, view, record } = input;
+  const intervals = input.intervals?.ok === true ? input.intervals.value : null;
   const { equation } = judgement.evidence;
   const { unit } = record.series;
   const { candidate, criteria } = fit;
@@ -89,15 +101,17 @@ function modelSection({ fit, judgement, view, record }: ReportInput): Section {
       ...rest.map((text) => ({ kind: 'paragraph' as const, text })),
       {
         kind: 'table',
-        head: ['coefficient', 'estimate', 'standard error', 'unit'],
-        rows: estimateLines(fit, equation, view.signs, unit).map(({ name, value, uncertainty, unit: own }) => [
-          name,
-          value,
-          uncertainty,
-          own,
+        head: ['coefficient', 'estimate', 'interval', 'standard error', 'unit'],
+        rows: estimateLines(fit, equation, view.signs, unit, intervals).map((line) => [
+          line.name,
+          line.value,
+          line.interval,
+          line.uncertainty,
+          line.unit,
         ]),
-        numbers: [1, 2],
+        numbers: [1, 2, 3],
       },
+      ...intervalBlocks(input),
       { kind: 'paragraph', text: `${signSentence(view.signs)}.` },
       {
         kind: 'facts',
@@ -116,6 +130,45 @@ function modelSection({ fit, judgement, view, record }: ReportInput): Section {
       },
     ],
   };
+}
+
+/** What the intervals say of derived quantities, what they assume, and what simulation said of them. */
+function intervalBlocks({ intervals, checks, view, record }: ReportInput): Block[] {
+  if (intervals === null) return [];
+  if (!intervals.ok) return [{ kind: 'paragraph', text: failureText(intervals.failure).what }];
+  const derived = derivedLines(intervals.value, record.series.axis);
+  const [first] = coverageRows;
+  return [
+    ...(derived.length === 0
+      ? []
+      : [
+          {
+            kind: 'table' as const,
+            head: ['follows from them', 'value', 'interval', ''],
+            rows: derived.map(({ name, value, interval, note }) => [name, value, interval, note]),
+            numbers: [1, 2],
+          },
+        ]),
+    {
+      kind: 'list',
+      items: [
+        ...intervalAssumptions(intervals.value),
+        ...(first === undefined ? [] : [measuredSentence()]),
+        ...checks.map(
+          (check) =>
+            `${coefficientName(check.about)} checked by simulation (likelihood ratio, ${check.replicates} records at each of ${check.tried.length} values, seed ${check.seed}): ${intervalShown(check.about, view.signs, check)}.`,
+        ),
+      ],
+    },
+  ];
+}
+
+function measuredSentence(): string {
+  const range = (column: number) => {
+    const values = coverageRows.map((row) => Number(row[column]));
+    return `${Math.min(...values).toFixed(1)} to ${Math.max(...values).toFixed(1)} %`;
+  };
+  return `Measured coverage of nominal 95 % intervals over ${coverageRows.length} designs (ARMA(1,1) with estimated mean, n 50 to 500): mean ${range(3)}, φ ${range(4)}, θ ${range(5)}, σ ${range(6)}.`;
 }
 
 function evidenceSection({ judgement, record }: ReportInput): Section {

@@ -4,6 +4,8 @@ import type { View } from '../../../workers/contract/envelope.ts';
 import type { Fit } from '../../../workers/contract/fit.ts';
 import type { Prediction } from '../../../workers/contract/prediction.ts';
 import type { ReadRecord } from '../../../workers/contract/reading.ts';
+import type { Result } from '../../../workers/contract/result.ts';
+import type { IntegratedIntervals, InvertedInterval } from '../../../workers/contract/uncertainty.ts';
 import type { Repair } from '../../../workers/contract/series.ts';
 
 /** What a dossier is made from: the inputs that produced the fit, never the current form. */
@@ -17,6 +19,10 @@ export interface ReportInput {
   readonly fit: Fit;
   readonly judgement: Judgement;
   readonly prediction: Prediction | null;
+  /** Null before they are known. */
+  readonly intervals: Result<IntegratedIntervals> | null;
+  /** Intervals of single parameters checked by simulation. */
+  readonly checks: readonly InvertedInterval[];
   readonly view: View;
   readonly madeAt: Date;
 }

@@ -1,10 +1,12 @@
 import type { SignConvention } from '../../../workers/contract/envelope.ts';
 import { Choice } from '../../components/Choice.tsx';
-import { equationLines, estimateLines, signSentence } from '../../format/equationText.ts';
-import { candidateName, estimatorName } from '../../format/notation.ts';
+import { equationLines, signSentence } from '../../format/equationText.ts';
+import { candidateName } from '../../format/notation.ts';
 import type { RecordState } from '../../state/appState.ts';
 import { chosenRow } from '../../state/selectors.ts';
 import { useActions, useAppState } from '../../state/useApp.ts';
+import { EstimateTable } from './EstimateTable.tsx';
+import { HowSure } from './HowSure.tsx';
 
 /** Size and shape of the chosen model: the equation in numbers and the estimates. */
 export function SizeAndShape({ record }: { readonly record: RecordState }) {
@@ -25,31 +27,9 @@ export function SizeAndShape({ record }: { readonly record: RecordState }) {
         </p>
       ))}
       <div className="estimates">
-        <table>
-          <caption>Estimates, {estimatorName(fit.candidate.estimator)}</caption>
-          <thead>
-            <tr>
-              <th scope="col">coefficient</th>
-              <th scope="col" className="number">
-                estimate
-              </th>
-              <th scope="col" className="number">
-                standard error
-              </th>
-              <th scope="col">unit</th>
-            </tr>
-          </thead>
-          <tbody>
-            {estimateLines(fit, equation, signs, unit).map((line) => (
-              <tr key={line.name}>
-                <th scope="row">{line.name}</th>
-                <td className="number">{line.value}</td>
-                <td className="number">{line.uncertainty}</td>
-                <td>{line.unit}</td>
-              </tr>
-            ))}
-          </tbody>
-        </table>
+        <div className="scroll" role="region" aria-label="Estimates" tabIndex={0}>
+          <EstimateTable fit={fit} equation={equation} signs={signs} series={record.source.record.series} />
+        </div>
         <div>
           <Choice
             label="Signs shown"
@@ -69,6 +49,7 @@ export function SizeAndShape({ record }: { readonly record: RecordState }) {
           </p>
         </div>
       </div>
+      <HowSure fit={fit} />
     </section>
   );
 }

@@ -33,11 +33,13 @@ export function createCandidateActions(store: Store, jobs: Jobs, history: Histor
     store.set((state) => withActive(state, edit));
     jobs.fitWaiting();
   };
-  const choose = (rowId: string | null) =>
+  const choose = (rowId: string | null) => {
     store.set((state) => {
       const index = activeRecord(state)?.rows.findIndex(({ id }) => id === rowId) ?? -1;
       return { ...state, view: { ...state.view, chosen: index < 0 ? null : index }, prediction: null };
     });
+    if (rowId !== null) jobs.wantIntervals(rowId);
+  };
   const has = (candidate: Candidate, except: string | null) =>
     activeRecord(store.get())?.rows.some(
       (row) => row.id !== except && candidateKey(row.candidate) === candidateKey(candidate),

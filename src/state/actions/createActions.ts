@@ -3,6 +3,7 @@ import type { Actions } from '../actionTypes.ts';
 import { createArrivals } from './arrivals.ts';
 import { createCandidateActions } from './candidateActions.ts';
 import { createHistory } from './history.ts';
+import { createIntervalJobs } from './intervalJobs.ts';
 import { createJobs } from './jobs.ts';
 import { createLinks, type Links } from './links.ts';
 import type { Platform } from './platform.ts';
@@ -17,7 +18,8 @@ export function createActions(
   platform: Platform,
 ): { actions: Actions; links: Links } {
   const history = createHistory(store);
-  const jobs = createJobs(store, client);
+  const intervalJobs = createIntervalJobs(store, client);
+  const jobs = createJobs(store, client, intervalJobs.want);
   const arrivals = createArrivals(store, client, jobs, history, (text) => links.openSessionText(text));
   const links = createLinks(store, platform, arrivals, jobs, history);
 
@@ -38,6 +40,8 @@ export function createActions(
     dismissArrival: arrivals.dismissArrival,
     forgetRecord: arrivals.forgetRecord,
     ...createCandidateActions(store, jobs, history),
+    checkInterval: intervalJobs.check,
+    stopCheck: intervalJobs.stopCheck,
     changeView: (part) => store.set((state) => ({ ...state, view: { ...state.view, ...part } })),
     undo: () => {
       history.undo();

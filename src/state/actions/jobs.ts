@@ -18,6 +18,8 @@ export interface Jobs {
   readonly cancel: () => void;
   readonly abortRow: (rowId: string) => void;
   readonly predict: (horizon: number) => void;
+  /** Intervals of a row's fit, where they are not known yet. */
+  readonly wantIntervals: (rowId: string) => void;
 }
 
 interface Ticket {
@@ -35,7 +37,8 @@ function stillWanted(state: AppState, ticket: Ticket): Row | null {
   return candidateKey(row.candidate) === ticket.key ? row : null;
 }
 
-export function createJobs(store: Store, client: CoreClient): Jobs {
+/** @param wantIntervals asks for the intervals of a row that has been judged */
+export function createJobs(store: Store, client: CoreClient, wantIntervals: (rowId: string) => void): Jobs {
   const set = (ticket: Ticket, change: (row: Row) => Row) =>
     store.set((state) =>
       stillWanted(state, ticket) === null
@@ -81,6 +84,7 @@ export function createJobs(store: Store, client: CoreClient): Jobs {
       set(ticket, (one) => withProgress(one, { kind: 'failed', failure: judged.failure }));
     searchAgain(record.id);
     await compareRows();
+    wantIntervals(row.id);
   };
 
   /** A larger candidate may never have the lower ln L: it is searched again from the smaller one's parameters. */
@@ -143,11 +147,13 @@ export function createJobs(store: Store, client: CoreClient): Jobs {
   return {
     fitWaiting,
     predict,
+    wantIntervals,
     abortRow: (rowId) => client.abort(rowId),
     cancel: () => {
       client.abortAll();
       store.set((state) => ({
         ...state,
+        checks: state.checks.filter(({ answer }) => answer !== null),
         records: state.records.map((record) => ({
           ...record,
           rows: record.rows.map((row) => (isUnderWay(row) ? waitingRow(row) : row)),

@@ -1,6 +1,6 @@
 import type { Platform } from './platform.ts';
 import type { Store } from '../store.ts';
-import { chosenRow } from '../selectors.ts';
+import { chosenRow, intervalsOf } from '../selectors.ts';
 import { activeRecord, note, trouble, withNotice } from '../updates.ts';
 
 /** Writes the dossier of the chosen candidate; the PDF library is loaded only now. */
@@ -27,6 +27,10 @@ export async function saveDossier(store: Store, platform: Platform): Promise<voi
       fit,
       judgement,
       prediction,
+      intervals: intervalsOf(state, fit),
+      checks: state.checks.flatMap(({ fit: own, answer }) =>
+        own === fit && answer?.ok === true ? [answer.value] : [],
+      ),
       view: state.view,
       madeAt: new Date(),
     });

@@ -5,6 +5,7 @@ import { fitCandidate } from '../../../workers/estimation/fitCandidate.ts';
 import { candidateOf } from '../../../workers/model/candidateOf.ts';
 import { predictReadings } from '../../../workers/prediction/predictReadings.ts';
 import { readRecord } from '../../../workers/reading/readRecord.ts';
+import { integratedIntervals } from '../../../workers/uncertainty/integratedIntervals.ts';
 import { judgeFit } from '../../../workers/verdict/judgeFit.ts';
 import { publishedSeries } from '../../helpers/publishedSeries.ts';
 
@@ -32,6 +33,8 @@ function report() {
     fit: fit.value,
     judgement: judged.value,
     prediction: predictReadings(fit.value, values, 5, { coverage: 0.95 }),
+    intervals: integratedIntervals({ fit: fit.value, values, coverage: 0.95, seed: 1 }),
+    checks: [],
     view: initialView,
     madeAt: new Date(Date.UTC(2026, 0, 2, 3, 4)),
   });
