@@ -1,29 +1,39 @@
 import type { Order } from '../../contract/candidate.ts';
-import { expandPolynomials, sparsePolynomial, type Factors } from '../../model/expandPolynomials.ts';
+import { expandPolynomials, type Factors } from '../../model/expandPolynomials.ts';
 import type { FastEngine } from './fastEngine.ts';
 import { factorStep } from './numericGradient.ts';
 import type { ProfileGls } from './profileGls.ts';
-import { backward, StartEffect } from './startEffect.ts';
+import { shortAdjoint } from './shortAdjoint.ts';
+import { startCovariance } from './startCovariance.ts';
+import { backward } from './startEffect.ts';
+import { StartGradient } from './startGradient.ts';
 import { adjointRecursion } from './steadyRecursion.ts';
+
+/** Half the distance of the differences by an MA coefficient: the covariance of the past is quadratic in it, so that they are exact. */
+const WIDE = 0.25;
 
 /**
  * Gradient of the concentrated ln L by the adjoint of the recursion.
  *
  * With ê the innovations of the regression residual r that start from the most likely past ĝ, and c their adjoint recursion, the sum of
  * squares changes by −2 Σ c_t r_{t−i} with a multiplied-out φ_i, by −2 Σ c_t ê_{t−j} with θ_j, and by −c′(dC)c over its first m places with
- * the covariance of the past (the envelope theorem: ĝ, β̂ and σ̂² do not contribute). Only dC and d ln|V|, which do not touch the record,
- * are differenced numerically. ln |F′V⁻¹F| of the columns for missing readings is the same with each of their orthonormal combinations in
- * the place of r. Costs about two evaluations, and one more for each missing reading.
+ * the covariance of the past (the envelope theorem: ĝ, β̂ and σ̂² do not contribute); for ln |V| see `StartGradient`. Only dC, which touches
+ * neither the record nor the response to the past, is differenced numerically. ln |F′V⁻¹F| of the columns for missing readings is the same
+ * with each of their orthonormal combinations in the place of r. Costs about two evaluations, and one more for each missing reading.
  */
 export class FastGradient {
   private readonly residual: Float64Array;
   private readonly shocks: Float64Array;
   private readonly adjoint: Float64Array;
-  private readonly near: StartEffect;
+  private readonly start: StartGradient;
+  private readonly near: Float64Array;
   /** Σ scale·c c′ over what was probed. */
   private readonly past: Float64Array;
   private readonly byAr: Float64Array;
   private readonly byMa: Float64Array;
+  private readonly sums = new Float64Array(4);
+  /** Lags of the multiplied-out MA polynomial that the coefficients can reach. */
+  private readonly maLags: readonly number[];
 
   constructor(
     private readonly engine: FastEngine,
@@ -31,13 +41,20 @@ export class FastGradient {
     private readonly readings: number,
   ) {
     const { observed: n, pad } = engine;
+    const { p, q, P, Q, s } = order;
     this.residual = new Float64Array(n + pad);
     this.shocks = new Float64Array(n + pad);
     this.adjoint = new Float64Array(n + 2 * pad);
-    this.near = new StartEffect(n, pad);
-    this.past = new Float64Array(this.near.m ** 2);
-    this.byAr = new Float64Array(order.p + order.s * order.P + 1);
-    this.byMa = new Float64Array(order.q + order.s * order.Q + 1);
+    const { m } = engine.start;
+    this.start = new StartGradient(n, m);
+    this.near = new Float64Array(m * m);
+    this.past = new Float64Array(m * m);
+    this.byAr = new Float64Array(p + s * P + 1);
+    this.byMa = new Float64Array(q + s * Q + 1);
+    const lags = new Set<number>();
+    for (let j = 0; j <= Q; j++) for (let i = 0; i <= q; i++) lags.add(i + j * s);
+    lags.delete(0);
+    this.maLags = [...lags];
   }
 
   /** After the engine has evaluated `factors` and `gls` was solved. */
@@ -47,7 +64,7 @@ export class FastGradient {
     this.byAr.fill(0);
     this.byMa.fill(0);
     this.past.fill(0);
-    const { flat, count } = this.engine;
+    const { flat, count, start, sparseMa } = this.engine;
     const weights = new Float64Array(count);
     weights[0] = 1;
     for (let i = 1; i < count; i++) weights[i] = -profile.weights[i - 1]!;
@@ -59,22 +76,29 @@ export class FastGradient {
       weights.set(combination, 1);
       this.probe(factors, weights, 1);
     }
+    if (start.m > 0) this.start.add(start, sparseMa, this.maLags, this.byMa);
     chain(factors.seasonalAr, p, s, -1, this.byAr, gradient, 0);
     chain(factors.seasonalMa, q, s, 1, this.byMa, gradient, p);
     chainSeasonal(factors.ar, P, s, -1, this.byAr, gradient, p + q);
     chainSeasonal(factors.ma, Q, s, 1, this.byMa, gradient, p + q + P);
-    if (this.engine.start.m > 0) this.addStart(factors, gradient);
+    if (start.m > 0) this.addCovariance(factors, gradient);
   }
 
   /** Adds −½·scale·d(x′V⁻¹x) for a combination x of the series, lag by lag, and its part of the start. */
   private probe(factors: Factors, weights: Float64Array, scale: number): void {
-    const { engine, residual, shocks, adjoint, past } = this;
-    const { start, pad, observed: n } = engine;
+    const { engine, residual, shocks, adjoint, past, byAr, byMa, sums } = this;
+    const { start, pad, observed: n, sparseMa } = engine;
     this.combine(weights);
     const c = this.addPast(weights);
-    adjointRecursion(shocks, adjoint, pad, n, engine.sparseMa);
-    this.byLag(factors.ar, factors.seasonalAr, residual, this.byAr, scale);
-    this.byLag(factors.ma, factors.seasonalMa, shocks, this.byMa, scale);
+    if (byAr.length <= 3 && byMa.length <= 3 && pad > 0) {
+      shortAdjoint(residual, shocks, pad, n, sparseMa, sums);
+      for (let lag = 1; lag < byAr.length; lag++) byAr[lag]! += scale * sums[lag - 1]!;
+      for (let lag = 1; lag < byMa.length; lag++) byMa[lag]! += scale * sums[lag + 1]!;
+    } else {
+      adjointRecursion(shocks, adjoint, pad, n, sparseMa);
+      this.byLag(factors.ar, factors.seasonalAr, residual, byAr, scale);
+      this.byLag(factors.ma, factors.seasonalMa, shocks, byMa, scale);
+    }
     const { m } = start;
     for (let i = 0; i < m; i++) for (let k = 0; k < m; k++) past[i * m + k]! += scale * c[i]! * c[k]!;
   }
@@ -82,17 +106,16 @@ export class FastGradient {
   /** x and its e⁰. */
   private combine(weights: Float64Array): void {
     const { engine, residual, shocks } = this;
-    residual.fill(0);
-    shocks.fill(0);
+    let first = true;
     weights.forEach((value, i) => {
       if (value === 0) return;
-      const column = engine.series[i]!;
-      const filtered = engine.innovations[i]!;
-      for (let t = 0; t < residual.length; t++) {
-        residual[t]! += value * column[t]!;
-        shocks[t]! += value * filtered[t]!;
-      }
+      accumulate(residual, engine.series[i]!, value, first);
+      accumulate(shocks, engine.innovations[i]!, value, first);
+      first = false;
     });
+    if (!first) return;
+    residual.fill(0);
+    shocks.fill(0);
   }
 
   /** Adds H ĝ to the innovations and returns c over the first m places, c = L M⁻¹ y. */
@@ -134,21 +157,23 @@ export class FastGradient {
     }
   }
 
-  /** The part of the start: ½ Σ scale·c′Cc − ½ ln |V| differenced with respect to every coefficient. */
-  private addStart(factors: Factors, gradient: Float64Array): void {
-    const { past } = this;
-    const n = this.engine.observed;
-    const here = startHeight(this.engine.start, past);
+  /** What the covariance of the past adds: ½ tr((Σ scale·cc′ − A) dC), A of `StartGradient`. */
+  private addCovariance(factors: Factors, gradient: Float64Array): void {
+    const { past, near, order } = this;
+    const { observed: n, start } = this.engine;
+    const { m } = start;
+    for (let i = 0; i < m * m; i++) past[i]! -= this.start.forCovariance[i]!;
+    const here = halfTrace(past, start.covariance);
     let at = 0;
     for (const name of ['ar', 'ma', 'seasonalAr', 'seasonalMa'] as const) {
       const own = Float64Array.from(factors[name]);
-      const step = factorStep(own, name === 'ma' || name === 'seasonalMa', n);
+      const step = name === 'ma' || name === 'seasonalMa' ? WIDE : factorStep(own, false, n);
       for (let i = 0; i < own.length; i++, at++) {
         const centre = own[i]!;
         const value = (shift: number): number | null => {
           own[i] = centre + shift;
-          const { ar, ma } = expandPolynomials({ ...factors, [name]: own }, this.order.s);
-          return this.near.prepare(ar, ma, sparsePolynomial(ma)) ? startHeight(this.near, past) : null;
+          const { ar, ma } = expandPolynomials({ ...factors, [name]: own }, order.s);
+          return startCovariance(ar, ma, m, near) ? halfTrace(past, near) : null;
         };
         const above = value(step);
         const below = value(-step);
@@ -160,10 +185,17 @@ export class FastGradient {
   }
 }
 
-function startHeight({ covariance, m, logDeterminant }: StartEffect, past: Float64Array): number {
+function halfTrace(one: Float64Array, other: Float64Array): number {
   let trace = 0;
-  for (let i = 0; i < m * m; i++) trace += past[i]! * covariance[i]!;
-  return 0.5 * (trace - logDeterminant);
+  for (let i = 0; i < one.length; i++) trace += one[i]! * other[i]!;
+  return trace / 2;
+}
+
+/** sum (or, the first time, nothing) plus factor·x. */
+function accumulate(sum: Float64Array, x: Float64Array, factor: number, first: boolean): void {
+  if (!first) for (let t = 0; t < sum.length; t++) sum[t]! += factor * x[t]!;
+  else if (factor === 1) sum.set(x);
+  else for (let t = 0; t < sum.length; t++) sum[t] = factor * x[t]!;
 }
 
 /** Σ c_t x_{t−lag}; what lies before the start is zero. */
