@@ -61,14 +61,20 @@ function derivative({ ar, ma, seasonalAr, seasonalMa }: Coefficients, season: nu
   throw new RangeError(`There is no coefficient ${index}.`);
 }
 
-/** Coefficients of 1/(1 − Σ sign·c_j Bʲ). */
+/** A term of a response below this, for as many steps as the order, is nothing beside the first, which is 1. */
+const NOTHING = 1e-18;
+
+/** Coefficients of 1/(1 − Σ sign·c_j Bʲ), as far as they are something. */
 function reciprocalSeries(values: Float64Array, sign: number, terms: number): Float64Array {
   const series = new Float64Array(terms);
   series[0] = 1;
+  let quiet = 0;
   for (let t = 1; t < terms; t++) {
     let sum = 0;
     for (let j = 0; j < Math.min(values.length, t); j++) sum += sign * values[j]! * series[t - 1 - j]!;
     series[t] = sum;
+    quiet = Math.abs(sum) < NOTHING ? quiet + 1 : 0;
+    if (quiet > values.length) return series.subarray(0, t + 1);
   }
   return series;
 }

@@ -22,6 +22,7 @@ export function conditionalSurface({ likelihood }: Job): Surface {
       numericGradient(coefficients, (near) => heightOf(likelihood.conditional(near)), here, readings, gradient);
       return here;
     },
+    betaAt: (coefficients) => likelihood.conditional(coefficients).beta,
     implied: (coefficients) => {
       const found = likelihood.conditional(coefficients);
       const exact = likelihood.concentrated(coefficients);

@@ -8,7 +8,7 @@ import type { Coefficients, SearchSpace } from './search/searchSpace.ts';
 export interface CurvatureSource {
   /** ln L with level, regression and σ² profiled out; writes its gradient for all coefficients. */
   readonly gradientAt: (coefficients: Coefficients, gradient: Float64Array) => number;
-  /** Estimates of level and regression at given coefficients. */
+  /** Estimates of level and regression at the coefficients that `gradientAt` was called with last. */
   readonly betaAt: (coefficients: Coefficients) => Float64Array;
   /** X′V⁻¹X/σ² at the estimates, row-major: the information on level and regression for known coefficients. */
   readonly betaInformation: Float64Array;
@@ -31,6 +31,11 @@ export type CovarianceEnd =
       readonly smallest: number;
     };
 
+/**
+ * First step of the differences, in asymptotic standard errors: the gradient bends by its square (some 1e-5), which one
+ * extrapolation removes, and its own rounding, near 1e-11, is nothing beside its change over such a step.
+ */
+const STEP = 0.005;
 /** Largest relative error of the Hessian for which standard errors are given. */
 const EXACT_ENOUGH = 1e-3;
 /** A direction of the scaled Hessian flatter than this is no information: its standard error would be noise. */
@@ -42,8 +47,8 @@ const FLAT = 1e-7;
  *
  * Method: block inversion. With C the inverse of −∇² of the profile over the coefficients ψ and J = ∂β̂/∂ψ, the
  * covariance is [C, CJ′; JC, (X′V⁻¹X/σ²)⁻¹ + JCJ′], which is that of the joint Hessian. ∇² comes from gradients by
- * extrapolated central differences; the first step is a tenth of each asymptotic standard error, shortened until both
- * ends are stationary and invertible.
+ * extrapolated central differences; the first step is a small part of each asymptotic standard error, shortened until
+ * both ends are stationary and invertible. J comes from the same evaluations.
  *
  * @param source see CurvatureSource
  * @param space its `coefficients` hold the estimates on entry and on return
@@ -62,23 +67,27 @@ export function covarianceFromHessian(
   const s = Math.round(Math.sqrt(source.betaInformation.length));
   const asymptotic = asymptoticInformation(space.coefficients, source.season, rows, source.readings);
   const scales = rows.map((_, i) => 1 / Math.sqrt(source.readings * asymptotic[i * k + i]!));
-  const steps = rows.map((row, i) => insideStep(space, centre, row, 0.1 * scales[i]!));
+  const steps = rows.map((row, i) => insideStep(space, centre, row, STEP * scales[i]!));
   const full = new Float64Array(all.length);
   const place = (at: Float64Array) => {
     all.set(centre);
     rows.forEach((row, i) => (all[row] = at[i]!));
   };
   const here = Float64Array.from(rows, (row) => centre[row]!);
+  const probes: Probe[] = [];
   const curvature = hessian(
     (at, gradient) => {
       place(at);
       source.gradientAt(space.coefficients, full);
       rows.forEach((row, i) => (gradient[i] = -full[row]!));
+      const column = here.findIndex((value, i) => value !== at[i]!);
+      if (s > 0)
+        probes.push({ column, shift: at[column]! - here[column]!, beta: source.betaAt(space.coefficients).slice() });
     },
     here,
     steps,
   );
-  const jacobian = s > 0 ? betaJacobian(source, space, place, here, steps) : new Float64Array(0);
+  const jacobian = betaJacobian(probes, k, s);
   all.set(centre);
 
   // Scaled to a unit diagonal so that "flat" does not depend on the units of a coefficient.
@@ -122,33 +131,28 @@ function insideStep(space: SearchSpace, centre: Float64Array, row: number, wante
   return step;
 }
 
-/** ∂β̂/∂ψ, s×k row-major, by central differences extrapolated once. */
-function betaJacobian(
-  source: CurvatureSource,
-  space: SearchSpace,
-  place: (at: Float64Array) => void,
-  here: Float64Array,
-  steps: readonly number[],
-): Float64Array {
-  const k = here.length;
-  const at = here.slice();
-  const betaAt = (i: number, shift: number) => {
-    at[i] = here[i]! + shift;
-    place(at);
-    at[i] = here[i]!;
-    return source.betaAt(space.coefficients).slice();
-  };
-  const columns = steps.map((step, i) => {
-    const slope = (h: number) => {
-      const ahead = betaAt(i, h);
-      const behind = betaAt(i, -h);
-      return ahead.map((value, r) => (value - behind[r]!) / (2 * h));
+/** What level and regression were estimated as with one coefficient shifted. */
+interface Probe {
+  readonly column: number;
+  readonly shift: number;
+  readonly beta: Float64Array;
+}
+
+/** ∂β̂/∂ψ, s×k row-major, by central differences over the two smallest steps taken of each coefficient, extrapolated once. */
+function betaJacobian(probes: readonly Probe[], k: number, s: number): Float64Array {
+  const jacobian = new Float64Array(s * k);
+  for (let i = 0; i < k; i++) {
+    // They come in pairs, ahead and behind, each step half of the one before.
+    const own = probes.filter(({ column }) => column === i).slice(-4);
+    const slope = (r: number, at: number) => {
+      const ahead = own[at]!;
+      const behind = own[at + 1]!;
+      return (ahead.beta[r]! - behind.beta[r]!) / (ahead.shift - behind.shift);
     };
-    const [coarse, fine] = [slope(step / 2), slope(step / 4)];
-    return fine.map((value, r) => (4 * value - coarse[r]!) / 3);
-  });
-  const s = columns[0]?.length ?? 0;
-  return Float64Array.from({ length: s * k }, (_, place) => columns[place % k]![Math.floor(place / k)]!);
+    for (let r = 0; r < s; r++)
+      jacobian[r * k + i] = own.length < 4 ? slope(r, 0) : (4 * slope(r, 2) - slope(r, 0)) / 3;
+  }
+  return jacobian;
 }
 
 function joinBlocks(

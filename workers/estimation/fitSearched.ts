@@ -22,6 +22,8 @@ const ROUNDING = 2 ** -46;
 export interface Surface {
   /** Writes the gradient for all coefficients and returns the height. */
   readonly gradientAt: (coefficients: Coefficients, gradient: Float64Array) => number;
+  /** Level and regression at the coefficients that `gradientAt` was called with last. */
+  readonly betaAt: (coefficients: Coefficients) => Float64Array;
   readonly implied: (coefficients: Coefficients) => {
     readonly height: number;
     /** What the estimator minimises: −ln L, or the sum of squares. */
@@ -114,6 +116,7 @@ function refuseNoiseless({ likelihood, candidate }: Job, centred: Float64Array):
 function exactSurface({ likelihood }: Job): Surface {
   return {
     gradientAt: (coefficients, gradient) => likelihood.concentratedWithGradient(coefficients, gradient),
+    betaAt: () => likelihood.lastBeta(),
     implied: (coefficients) => {
       const { logLikelihood, ...rest } = likelihood.concentrated(coefficients);
       return { height: logLikelihood, objective: -logLikelihood, ...rest };
@@ -132,7 +135,7 @@ function covarianceAt(
   space.place(best.landing.x);
   const source = {
     gradientAt: surface.gradientAt,
-    betaAt: (coefficients: Coefficients) => surface.implied(coefficients).beta,
+    betaAt: surface.betaAt,
     betaInformation: surface.implied(space.coefficients).betaInformation.slice(),
     readings,
     season: Math.max(1, season),

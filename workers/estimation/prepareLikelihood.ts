@@ -37,6 +37,8 @@ export interface PreparedLikelihood {
   readonly concentrated: (factors: Factors) => Concentrated;
   /** ln L; writes its gradient by φ, θ, Φ, Θ in this order. */
   readonly concentratedWithGradient: (factors: Factors, gradient: Float64Array) => number;
+  /** Level and regression where the gradient was taken last, in the record's own units. */
+  readonly lastBeta: () => Float64Array;
   /** Conditional sum of squares and what it implies; only without gaps. */
   readonly conditional: (factors: Factors) => Conditional;
   /** Exact ln L at fixed parameters, nothing profiled. */
@@ -103,6 +105,7 @@ export function prepareLikelihood(request: PrepareRequest): Result<PreparedLikel
     return evaluate(ar, ma, whole);
   };
   const gradientOf = fast && new FastGradient(fast, order, readingsUsed);
+  let lastBeta = new Float64Array(columns.length);
 
   const value: PreparedLikelihood = {
     readingsUsed,
@@ -119,11 +122,13 @@ export function prepareLikelihood(request: PrepareRequest): Result<PreparedLikel
     concentratedWithGradient: (factors, gradient) => {
       const gls = at(factors, true);
       const value = height(gls);
+      if (gls !== null) lastBeta = ownBeta(prepared, gls);
       if (gls === null) gradient.fill(0);
       else if (gradientOf !== null && current === fast) gradientOf.write(factors, gls, gradient);
       else numericGradient(factors, (near) => height(at(near)), value, readingsUsed, gradient);
       return value;
     },
+    lastBeta: () => lastBeta,
     conditional: (factors) => conditionalLikelihood(prepared, differenced, expandPolynomials(factors, s)),
     atParameters: (parameters) => {
       const { ar, ma } = expandPolynomials(parameters, s);
@@ -150,6 +155,16 @@ function fixedSumOfSquares(gls: ProfileGls, beta: Float64Array): number {
   return sum;
 }
 
+/** Level and regression in the record's own units. */
+function ownBeta({ columnCentres, columnScales, scale, centre, columnNames }: PreparedRecord, gls: ProfileGls) {
+  const own = gls.profile.beta.map((value, i) => (value * scale) / columnScales[i]!);
+  if (columnNames[0] === 'mean') {
+    own[0]! += centre;
+    for (let i = 1; i < own.length; i++) own[0]! -= own[i]! * columnCentres[i]!;
+  }
+  return own;
+}
+
 function describe(prepared: PreparedRecord, gls: ProfileGls | null, logLikelihood: number): Concentrated {
   const k = prepared.columns.length;
   if (gls === null)
@@ -159,13 +174,8 @@ function describe(prepared: PreparedRecord, gls: ProfileGls | null, logLikelihoo
       innovationVariance: NaN,
       betaInformation: new Float64Array(k * k),
     };
-  const { columnCentres, columnScales, scale, centre, readingsUsed, columnNames } = prepared;
-  const { rss, beta, information } = gls.profile;
-  const own = beta.map((value, i) => (value * scale) / columnScales[i]!);
-  if (columnNames[0] === 'mean') {
-    own[0]! += centre;
-    for (let i = 1; i < k; i++) own[0]! -= own[i]! * columnCentres[i]!;
-  }
+  const { columnCentres, columnScales, scale, readingsUsed, columnNames } = prepared;
+  const { rss, information } = gls.profile;
   const variance = rss / readingsUsed;
   // In the readings' units; a centred column shifts the mean, so the information on the mean's row is carried over.
   const betaInformation = new Float64Array(k * k);
@@ -174,7 +184,7 @@ function describe(prepared: PreparedRecord, gls: ProfileGls | null, logLikelihoo
       betaInformation[i * k + j] =
         (information[i * k + j]! * columnScales[i]! * columnScales[j]!) / (variance * scale * scale);
   if (columnNames[0] === 'mean') uncentre(betaInformation, columnCentres, k);
-  return { logLikelihood, beta: own, innovationVariance: variance * scale * scale, betaInformation };
+  return { logLikelihood, beta: ownBeta(prepared, gls), innovationVariance: variance * scale * scale, betaInformation };
 }
 
 /** Information on (mean, β) from that on (mean + Σ β c, β): A′IA with A the identity and c in the first row. */

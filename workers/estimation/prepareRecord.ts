@@ -152,7 +152,7 @@ function shifted(failure: Failure, by: number): { ok: false; failure: Failure } 
 
 function firstReadings(length: number, differencing: Float64Array): { rank: number; spent: Uint8Array } {
   const rank = differencing.length - 1;
-  return { rank, spent: Uint8Array.from({ length }, (_, t) => (t < rank ? 1 : 0)) };
+  return { rank, spent: new Uint8Array(length).fill(1, 0, rank) };
 }
 
 function observedMean(values: Float64Array): number {

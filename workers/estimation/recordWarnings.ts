@@ -56,14 +56,20 @@ function varianceOf(values: Float64Array): number {
 /** How many readings are one in fifty (at least one), and the share of Σ(y − median)² that the farthest ones carry. */
 function shareOfFew(sorted: Float64Array): { points: number; share: number } {
   const median = sorted[sorted.length >> 1]!;
-  const squares = sorted.map((value) => (value - median) ** 2).sort();
   const points = Math.max(1, Math.floor(sorted.length * FEW));
   let total = 0;
+  for (const value of sorted) total += (value - median) ** 2;
+  // The farthest from the median stand at the two ends.
   let top = 0;
-  squares.forEach((value, i) => {
-    total += value;
-    if (i >= squares.length - points) top += value;
-  });
+  let low = 0;
+  let high = sorted.length - 1;
+  for (let i = 0; i < points; i++) {
+    const below = median - sorted[low]!;
+    const above = sorted[high]! - median;
+    if (below > above) low++;
+    else high--;
+    top += Math.max(below, above) ** 2;
+  }
   return { points, share: total > 0 ? top / total : 0 };
 }
 

@@ -41,13 +41,14 @@ export function hannanRissanen(centred: Float64Array, order: Order, zeroLags: Ze
   const normal = new Float64Array(k * k);
   const right = new Float64Array(k);
   const row = new Float64Array(k);
+  const sources = terms.map(({ part }) => (part === 'ar' || part === 'seasonalAr' ? centred : innovations));
+  const lags = Int32Array.from(terms, ({ lag }) => lag);
   let rows = 0;
   for (let t = longest; t < n; t++) {
     const target = centred[t]!;
     let sound = target;
     for (let i = 0; i < k; i++) {
-      const { lag, part } = terms[i]!;
-      row[i] = part === 'ar' || part === 'seasonalAr' ? centred[t - lag]! : innovations[t - lag]!;
+      row[i] = sources[i]![t - lags[i]!]!;
       sound += row[i]!;
     }
     if (sound !== sound) continue;

@@ -5,15 +5,21 @@ import { burg } from './burg.ts';
 import { hannanRissanen } from './hannanRissanen.ts';
 import { pairwiseAutocovariances } from './pairwiseAutocovariances.ts';
 
+/** Readings, and seasons, that starting values are made of: more would make them more exact than a start need be. */
+const ENOUGH = 4000;
+const SEASONS = 40;
+
 /**
  * Starting points of the search that have a reason: Hannan–Rissanen, the autoregression alone (Burg's, or
  * Yule–Walker's where there are gaps), no memory, and plain values of each kind of memory.
  *
- * @param centred the (differenced, transformed) record less its level and regression; NaN is a gap
+ * @param whole the (differenced, transformed) record less its level and regression; NaN is a gap. Of a very
+ *   long one a stretch is used
  * @returns coordinates in `space`, best reasons first
  */
-export function startingPoints(space: SearchSpace, candidate: Candidate, centred: Float64Array): Float64Array[] {
+export function startingPoints(space: SearchSpace, candidate: Candidate, whole: Float64Array): Float64Array[] {
   const { order, zeroLags } = candidate;
+  const centred = stretchOf(whole, Math.max(ENOUGH, SEASONS * order.s));
   const starts: Float64Array[] = [];
   const regression = hannanRissanen(centred, order, zeroLags);
   if (regression !== null) starts.push(space.locate(regression));
@@ -54,6 +60,23 @@ export function withCancellingPair(space: SearchSpace, candidate: Candidate, sma
       ma: timesFactor(smaller.ma, root, 1).slice(0, q),
     }),
   );
+}
+
+/** A stretch of at most so many values: of five places, the one with the fewest gaps. */
+function stretchOf(whole: Float64Array, most: number): Float64Array {
+  if (whole.length <= most) return whole;
+  let best = whole;
+  let fewest = Infinity;
+  for (let i = 0; i < 5; i++) {
+    const from = Math.floor((i * (whole.length - most)) / 4);
+    const stretch = whole.subarray(from, from + most);
+    let gaps = 0;
+    for (const value of stretch) if (value !== value) gaps++;
+    if (gaps >= fewest) continue;
+    best = stretch;
+    fewest = gaps;
+  }
+  return best;
 }
 
 const NONE = { ar: [], ma: [], seasonalAr: [], seasonalMa: [] };
