@@ -10,6 +10,8 @@ import { FastGradient } from './engine/fastGradient.ts';
 import { GapFilter } from './engine/gapFilter.ts';
 import { numericGradient } from './engine/numericGradient.ts';
 import { ProfileGls } from './engine/profileGls.ts';
+import { SeasonalEngine } from './engine/seasonalEngine.ts';
+import { SeasonalGradient } from './engine/seasonalGradient.ts';
 import { scaledBeta } from './scaledBeta.ts';
 import { columnsForGaps, withoutGaps } from './engine/columnsForGaps.ts';
 import { prepareRecord, type PreparedRecord, type PrepareRequest } from './prepareRecord.ts';
@@ -50,7 +52,7 @@ export interface PreparedLikelihood {
  *
  * ln L is that of the record with a flat prior on its d + sD starting values, all constants kept, in the units of the
  * readings (the transform's Jacobian summed over the readings used). The engine is chosen by the record and the cost: without gaps, or
- * with few of them beside long lags, the fast one; else the filter, with differencing with its diffuse start. Where rounding would eat
+ * with few of them beside long lags, the fast one, by phases of the season where that is long; else the filter, with differencing with its diffuse start. Where rounding would eat
  * the fast one's answer the filter takes over.
  *
  * @param request values (gaps as NaN), a checked candidate, window, covariates by name, λ
@@ -69,8 +71,12 @@ export function prepareLikelihood(request: PrepareRequest): Result<PreparedLikel
   const differenced = [record, ...columns].map(difference);
   const missing = columnsForGaps(record, p, q, differencing.length - 1, columns.length);
   const filled = missing === null ? null : [withoutGaps(record), ...missing, ...columns].map(difference);
-  const fast = filled === null ? null : new FastEngine(filled, p, q, missing!.length);
-  const fastGls = fast && new ProfileGls(fast.count, fast.flat);
+  const length = filled?.[0]!.length ?? 0;
+  const seasonal =
+    filled !== null && SeasonalEngine.fits(order, length) ? new SeasonalEngine(filled, order, missing!.length) : null;
+  const gls = filled === null ? null : new ProfileGls(filled.length, missing!.length);
+  // Beside the seasonal engine it is seldom wanted.
+  const fast = filled === null ? null : onceMade(() => new FastEngine(filled, p, q, missing!.length));
   let filter: GapFilter | null = null;
   let filterGls: ProfileGls | null = null;
   const slow = (): [GapFilter, ProfileGls] => {
@@ -82,17 +88,22 @@ export function prepareLikelihood(request: PrepareRequest): Result<PreparedLikel
     return [filter, filterGls];
   };
   const constant = readingsUsed * Math.log(scale) - prepared.logJacobian;
-  let current: Engine;
+  let current: Pick<Engine, 'kind' | 'logDeterminant'>;
 
   /** Evaluates and profiles; null outside the region. `whole`: a gradient is to follow. */
-  const evaluate = (ar: Float64Array, ma: Float64Array, whole: boolean): ProfileGls | null => {
-    if (fast !== null && fastGls !== null && fast.evaluate(ar, ma, whole) && fastGls.solve(fast.cross)) {
-      current = fast;
-      return fastGls;
+  const at = (factors: Factors, whole = false): ProfileGls | null => {
+    if (seasonal !== null && gls !== null && seasonal.evaluate(factors, s) && gls.solve(seasonal.cross)) {
+      current = seasonal;
+      return gls;
     }
-    const [engine, gls] = slow();
+    const { ar, ma } = expandPolynomials(factors, s);
+    if (fast !== null && gls !== null && fast().evaluate(ar, ma, whole) && gls.solve(fast().cross)) {
+      current = fast();
+      return gls;
+    }
+    const [engine, others] = slow();
     current = engine;
-    return engine.evaluate(ar, ma) && gls.solve(engine.cross) ? gls : null;
+    return engine.evaluate(ar, ma) && others.solve(engine.cross) ? others : null;
   };
   const height = (gls: ProfileGls | null): number => {
     if (gls === null) return -Infinity;
@@ -100,11 +111,8 @@ export function prepareLikelihood(request: PrepareRequest): Result<PreparedLikel
     const spread = Math.log((2 * Math.PI * rss) / readingsUsed) + 1;
     return -0.5 * (readingsUsed * spread + current.logDeterminant + flatLogDeterminant) - constant;
   };
-  const at = (factors: Factors, whole = false): ProfileGls | null => {
-    const { ar, ma } = expandPolynomials(factors, s);
-    return evaluate(ar, ma, whole);
-  };
-  const gradientOf = fast && new FastGradient(fast, order, readingsUsed);
+  const gradientOfFast = fast && onceMade(() => new FastGradient(fast(), order, readingsUsed));
+  const gradientOfSeasonal = seasonal && onceMade(() => new SeasonalGradient(seasonal, order, readingsUsed));
   let lastBeta = new Float64Array(columns.length);
 
   const value: PreparedLikelihood = {
@@ -124,15 +132,15 @@ export function prepareLikelihood(request: PrepareRequest): Result<PreparedLikel
       const value = height(gls);
       if (gls !== null) lastBeta = ownBeta(prepared, gls);
       if (gls === null) gradient.fill(0);
-      else if (gradientOf !== null && current === fast) gradientOf.write(factors, gls, gradient);
+      else if (gradientOfSeasonal !== null && current === seasonal) gradientOfSeasonal().write(factors, gls, gradient);
+      else if (gradientOfFast !== null && current.kind === 'fast') gradientOfFast().write(factors, gls, gradient);
       else numericGradient(factors, (near) => height(at(near)), value, readingsUsed, gradient);
       return value;
     },
     lastBeta: () => lastBeta,
     conditional: (factors) => conditionalLikelihood(prepared, differenced, expandPolynomials(factors, s)),
     atParameters: (parameters) => {
-      const { ar, ma } = expandPolynomials(parameters, s);
-      const gls = evaluate(ar, ma, false);
+      const gls = at(parameters);
       if (gls === null) return -Infinity;
       const rss = fixedSumOfSquares(gls, scaledBeta(prepared, parameters));
       const variance = parameters.innovationVariance / scale ** 2;
@@ -142,6 +150,12 @@ export function prepareLikelihood(request: PrepareRequest): Result<PreparedLikel
     },
   };
   return { ok: true, value };
+}
+
+/** What a call makes, made at the first one. */
+function onceMade<T>(make: () => T): () => T {
+  let made: { readonly value: T } | null = null;
+  return () => (made ??= { value: make() }).value;
 }
 
 /** Σ over the GLS sum of squares and the distance of `beta` from its optimum: no cancellation near the optimum. */

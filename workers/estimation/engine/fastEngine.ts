@@ -149,7 +149,8 @@ export class FastEngine implements Engine {
   }
 }
 
-function padded(values: Float64Array, pad: number): Float64Array {
+/** Values with zeros in front. */
+export function padded(values: Float64Array, pad: number): Float64Array {
   const result = new Float64Array(values.length + pad);
   result.set(values, pad);
   return result;

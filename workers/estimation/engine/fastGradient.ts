@@ -1,4 +1,5 @@
 import type { Order } from '../../contract/candidate.ts';
+import { accumulate, lagDot } from './adjointSums.ts';
 import { expandPolynomials, type Factors } from '../../model/expandPolynomials.ts';
 import type { FastEngine } from './fastEngine.ts';
 import { factorStep } from './numericGradient.ts';
@@ -189,27 +190,6 @@ function halfTrace(one: Float64Array, other: Float64Array): number {
   let trace = 0;
   for (let i = 0; i < one.length; i++) trace += one[i]! * other[i]!;
   return trace / 2;
-}
-
-/** sum (or, the first time, nothing) plus factor·x. */
-function accumulate(sum: Float64Array, x: Float64Array, factor: number, first: boolean): void {
-  if (!first) for (let t = 0; t < sum.length; t++) sum[t]! += factor * x[t]!;
-  else if (factor === 1) sum.set(x);
-  else for (let t = 0; t < sum.length; t++) sum[t] = factor * x[t]!;
-}
-
-/** Σ c_t x_{t−lag}; what lies before the start is zero. */
-function lagDot(c: Float64Array, x: Float64Array, pad: number, n: number, lag: number): number {
-  let even = 0;
-  let odd = 0;
-  let t = pad + lag;
-  const end = pad + n;
-  for (; t + 1 < end; t += 2) {
-    even += c[t]! * x[t - lag]!;
-    odd += c[t + 1]! * x[t + 1 - lag]!;
-  }
-  if (t < end) even += c[t]! * x[t - lag]!;
-  return even + odd;
 }
 
 /** Derivatives by the plain factor from those by multiplied-out lag. */

@@ -9,7 +9,7 @@ const BLOCK = 512;
  * Two passes: the AR part has no dependence between steps, the MA part is one chain. Low orders keep the last values in
  * registers. Both arrays carry `pad` zeros in front, so that no step asks where the start is.
  *
- * @param w padded values; @param e padded result; both at least pad + n long, pad ≥ the highest lag
+ * @param w padded values; @param e padded result, w itself where there is no AR part; both at least pad + n long, pad ≥ the highest lag
  * @param n number of steps
  */
 export function steadyRecursion(
@@ -52,8 +52,9 @@ function filterAr(
 ): void {
   const a = lags[0] ?? 0;
   const phi = values[0] ?? 0;
-  if (lags.length === 0) for (let t = from; t < to; t++) e[t] = w[t]!;
-  else if (lags.length === 1) for (let t = from; t < to; t++) e[t] = w[t]! - phi * w[t - a]!;
+  if (lags.length === 0) {
+    if (e !== w) for (let t = from; t < to; t++) e[t] = w[t]!;
+  } else if (lags.length === 1) for (let t = from; t < to; t++) e[t] = w[t]! - phi * w[t - a]!;
   else if (lags.length === 3) {
     const b = lags[1]!;
     const c = lags[2]!;
@@ -79,6 +80,9 @@ function filterMa(e: Float64Array, from: number, to: number, { lags, values }: S
   if (count === 1 && lags[0] === 1) {
     let last = e[from - 1]!;
     for (let t = from; t < to; t++) e[t] = last = e[t]! - theta * last;
+  } else if (count === 1) {
+    const a = lags[0]!;
+    for (let t = from; t < to; t++) e[t]! -= theta * e[t - a]!;
   } else if (count === 2 && lags[1] === 2) {
     const second = values[1]!;
     let last = e[from - 1]!;
@@ -125,6 +129,12 @@ export function adjointRecursion(e: Float64Array, c: Float64Array, pad: number, 
     const theta = values[0]!;
     let last = 0;
     for (let t = end - 1; t >= pad; t--) c[t] = last = e[t]! - theta * last;
+    return;
+  }
+  if (count === 1) {
+    const theta = values[0]!;
+    const a = lags[0]!;
+    for (let t = end - 1; t >= pad; t--) c[t] = e[t]! - theta * c[t + a]!;
     return;
   }
   for (let t = end - 1; t >= pad; t--) {
