@@ -13,11 +13,15 @@ const signatures: readonly (readonly [string, readonly number[], number?])[] = [
   ['gzip archive', [0x1f, 0x8b]],
   ['7z archive', [0x37, 0x7a, 0xbc, 0xaf, 0x27, 0x1c]],
   ['RAR archive', [0x52, 0x61, 0x72, 0x21, 0x1a, 0x07]],
-  ['older spreadsheet or office document', [0xd0, 0xcf, 0x11, 0xe0, 0xa1, 0xb1, 0x1a, 0xe1]],
+  [
+    'older spreadsheet or office document, or one locked by a password',
+    [0xd0, 0xcf, 0x11, 0xe0, 0xa1, 0xb1, 0x1a, 0xe1],
+  ],
   ['database', [0x53, 0x51, 0x4c, 0x69, 0x74, 0x65, 0x20]],
   ['Parquet table', [0x50, 0x41, 0x52, 0x31]],
   ['HDF5 file', [0x89, 0x48, 0x44, 0x46]],
 ];
+export const workbookKind = 'spreadsheet workbook (.xlsx)';
 const ZIP: readonly number[] = [0x50, 0x4b, 0x03, 0x04];
 
 /** Share of control characters from which on bytes without a signature are no text. */
@@ -32,7 +36,7 @@ const startsWith = (bytes: Uint8Array, mark: readonly number[], at = 0): boolean
 function zipKind(bytes: Uint8Array): string {
   let names = '';
   for (const byte of bytes.subarray(0, 4096)) names += String.fromCharCode(byte);
-  if (/xl\/|\[Content_Types\]/u.test(names)) return 'spreadsheet workbook (.xlsx)';
+  if (/xl\/|\[Content_Types\]/u.test(names)) return workbookKind;
   return names.includes('opendocument.spreadsheet') ? 'spreadsheet workbook (.ods)' : 'ZIP archive';
 }
 

@@ -24,6 +24,11 @@ export interface Dialect {
   readonly timeColumn: number | null;
   /** A second column that holds the time of day where date and time are apart. */
   readonly clockColumn: number | null;
+  /**
+   * Columns that hold year, month, day, hour, minute and second where the parts of the stamp stand apart, in this order and
+   * as many as there are (at least two); the first is `timeColumn`. null: the stamp stands in `timeColumn` as a whole.
+   */
+  readonly stampColumns: readonly number[] | null;
   readonly stamp: StampForm | null;
   /** IANA zone the stamps are read in; null is the plant clock as logged. */
   readonly zone: string | null;
@@ -32,6 +37,12 @@ export interface Dialect {
   readonly status: { readonly column: number; readonly keep: readonly string[] } | null;
   /** Texts read as a gap, compared without case and outer blanks. The empty cell always is one. */
   readonly gapWords: readonly string[];
+  /** Texts read as below a detection limit, compared without case and outer blanks; `<0.05` and `≤0.05` always are. Kept as gaps. */
+  readonly limitWords: readonly string[];
+  /** Which reading stays where a time repeats with another one: the first or last in the file, or none (`gap`). */
+  readonly repeats: 'first' | 'last' | 'gap';
+  /** Sheet of a workbook that the text was taken from; null for text files. */
+  readonly sheet: string | null;
   /** Grid of the record: `step` in seconds or months by `kind`; stamps off the grid follow `rule`. */
   readonly grid: {
     readonly kind: 'seconds' | 'months' | 'index';

@@ -95,6 +95,20 @@ export type ReadingFailure =
   /** Many rows share a stamp with a row of another value: the stamps are cut off, or several tags stand in one column. */
   | { readonly code: 'repeatedStamps'; readonly line: number; readonly text: string; readonly count: number }
   | { readonly code: 'unclosedQuote'; readonly line: number }
+  /** Unpacked, the workbook would take this many bytes. */
+  | { readonly code: 'workbookTooLarge'; readonly bytes: number; readonly limit: number }
+  | { readonly code: 'workbookDamaged'; readonly reason: string }
+  | { readonly code: 'workbookEmpty'; readonly sheets: readonly string[] }
+  | { readonly code: 'noSuchSheet'; readonly sheet: string; readonly sheets: readonly string[] }
+  /** Files that cannot be joined: what is different, in the first and in this one. */
+  | {
+      readonly code: 'filesDiffer';
+      readonly fileName: string;
+      readonly firstName: string;
+      readonly what: 'columns' | 'decimal' | 'stamp' | 'time';
+      readonly expected: string;
+      readonly found: string;
+    }
   /** Fields are separated by commas and numbers carry unquoted decimal commas: the columns cannot be told apart. */
   | { readonly code: 'decimalCommaClash'; readonly line: number; readonly text: string };
 

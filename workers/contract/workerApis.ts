@@ -2,7 +2,7 @@ import type { FitRequest } from './candidate.ts';
 import type { DiagnoseRequest, Judgement } from './diagnostics.ts';
 import type { Fit } from './fit.ts';
 import type { Prediction, PredictRequest } from './prediction.ts';
-import type { ReadAnswer, ReadRequest } from './reading.ts';
+import type { JoinedFiles, JoinRequest, ReadAnswer, ReadRequest, WorkbookRequest, WorkbookText } from './reading.ts';
 import type { Result } from './result.ts';
 import type { ComparisonGroup } from './selection.ts';
 import type { IntegratedIntervals, IntervalsRequest, InversionRequest, InvertedInterval } from './uncertainty.ts';
@@ -28,4 +28,11 @@ export interface ModellingApi extends Readiness {
 /** `workers/entry/reading.worker.ts`: a file's text to a record. `progress` is a Comlink proxy, called with 0…1. */
 export interface ReadingApi extends Readiness {
   read(request: ReadRequest, progress?: (fraction: number) => void): ReadAnswer;
+  /** Several files to one text in the order of time. */
+  join(request: JoinRequest): Result<JoinedFiles>;
+}
+
+/** `workers/entry/workbook.worker.ts`: lives for one workbook, so that its memory is given back. */
+export interface WorkbookApi extends Readiness {
+  read(request: WorkbookRequest): Promise<Result<WorkbookText>>;
 }
