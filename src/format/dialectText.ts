@@ -39,6 +39,12 @@ export function dialectSentence({ dialect, columns, rows }: Sniffed): string {
   return `${counted(rows, 'row')}, columns parted by ${delimiters[dialect.delimiter]}, ${decimal}, ${header}${units}${preamble}; ${time}; readings from ${named(dialect.valueColumn)}.`;
 }
 
+const repeatsKept: Record<string, string> = {
+  first: 'the first is kept',
+  last: 'the last is kept',
+  gap: 'none is kept, a gap is',
+};
+
 /** One thing found on reading, in words. */
 export function noteSentence({ kind, count, lines, texts }: ReadingNote): string {
   const at =
@@ -57,7 +63,11 @@ export function noteSentence({ kind, count, lines, texts }: ReadingNote): string
     case 'raggedRows':
       return `${rows} with more or fewer cells than the header${at}.`;
     case 'duplicateTimes':
-      return `${rows} with a time that was there already: the first is kept${at}.`;
+      return `${rows} with a time that was there already: one reading a time is kept${at}.`;
+    case 'conflictingTimes':
+      return `${rows} repeat a time with another reading: ${repeatsKept[texts[0] ?? 'first']}${at}.`;
+    case 'sharedPlaces':
+      return `${rows} share a place of the grid with others: ${texts[0] === 'last' ? 'the latest is kept' : 'their mean is taken'}.`;
     case 'reversedTimes':
       return `${rows} earlier than the row before: put in order${at}.`;
     case 'jitter':
@@ -69,7 +79,7 @@ export function noteSentence({ kind, count, lines, texts }: ReadingNote): string
     case 'leftOutByStatus':
       return `${rows} left out by the status column${such}${at}.`;
     case 'overlappingFiles':
-      return `${rows} in more than one file${at}.`;
+      return `Files overlap in time: ${rows} where another file has readings as well (${texts.join(', ')})${at}. Equal readings are merged.`;
     case 'clockChange':
       return `${rows} at a change of the clock${at}.`;
     case 'offGrid':

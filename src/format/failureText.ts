@@ -1,5 +1,6 @@
 import type { BadCandidateReason, Failure, LinkFailure, ReadingFailure } from '../../workers/contract/failures.ts';
 import { counted, formatNumber } from './numbers.ts';
+import { readingFailureText } from './readingFailureText.ts';
 
 /** What happened, where, and what to do. `where` may be empty. */
 export interface FailureText {
@@ -163,7 +164,7 @@ export function failureText(failure: Failure): FailureText {
     case 'noSuchParameter':
       return say('The fit has no such parameter.', failure.name, 'Fit the candidate again.');
     default:
-      return isLinkFailure(failure) ? linkText(failure) : readingText(failure);
+      return isLinkFailure(failure) ? linkText(failure) : readingFailureText(failure);
   }
 }
 
@@ -215,97 +216,6 @@ function linkText(failure: LinkFailure): FailureText {
           : 'This record is not the one the session was made with.',
         failure.fileName,
         'The candidates of the session were fitted to it all the same; their numbers will differ. Undo to go back.',
-      );
-  }
-}
-
-function readingText(failure: ReadingFailure): FailureText {
-  switch (failure.code) {
-    case 'emptyFile':
-      return say('The file is empty.', '', 'Export it again and open it anew. What was open is kept.');
-    case 'binaryFile':
-      return say(
-        `This is not a text file (${failure.kind}).`,
-        '',
-        'Export the record as CSV or text and open that. What was open is kept.',
-      );
-    case 'fileTooLarge':
-      return say(
-        `The file is too large (${formatNumber(failure.bytes / 1e6, 4)} MB).`,
-        `limit ${formatNumber(failure.limit / 1e6, 4)} MB`,
-        'Export a shorter stretch or fewer columns.',
-      );
-    case 'noNumbers':
-      return say(
-        'No column of numbers was found.',
-        `line ${failure.line}, column ${failure.column}: “${failure.example}”`,
-        'Check the delimiter and the decimal mark below, or open another file.',
-      );
-    case 'noSuchColumn':
-      return say(
-        `There is no column ${failure.column}; the file has ${counted(failure.columns, 'column')}.`,
-        '',
-        'Choose another column.',
-      );
-    case 'tooFewRows':
-      return say(
-        `Only ${counted(failure.readings, 'reading')} in this column; at least ${failure.needed} are needed.`,
-        '',
-        'Choose another column, or bring a longer record.',
-      );
-    case 'allGaps':
-      return say(
-        `The column has no readings at all: ${counted(failure.rows, 'row')}, every one a gap.`,
-        failure.column,
-        'Choose another column, or check the decimal mark.',
-      );
-    case 'constantColumn':
-      return say(
-        `Every reading of the column is the same (${formatNumber(failure.value, 6)}): there is no variation to model.`,
-        failure.column,
-        'Choose another column.',
-      );
-    case 'badStamp':
-      return say(
-        `${counted(failure.count, 'time stamp')} cannot be read.`,
-        `line ${failure.line}, column ${failure.column}: “${failure.text}”`,
-        'Choose how the times are written, or another time column, or no time at all.',
-      );
-    case 'ambiguousDates':
-      return say(
-        'The dates can be read day first or month first.',
-        `line ${failure.line}: “${failure.text}”`,
-        'Say which it is.',
-      );
-    case 'noRegularAxis':
-      return say(
-        `No regular interval fits the times: ${failure.offGrid} of ${failure.rows} rows are off a grid of ${formatNumber(failure.interval, 5)} s.`,
-        '',
-        'Choose another time column, or no time: the readings are then numbered.',
-      );
-    case 'gridTooLong':
-      return say(
-        `The times span ${failure.places} places of the grid, more than ${failure.limit}.`,
-        `line ${failure.line}`,
-        'One stamp is probably wrong by years; correct it or choose a longer interval.',
-      );
-    case 'decimalCommaClash':
-      return say(
-        'Commas stand both between columns and inside numbers: the columns cannot be told apart.',
-        `line ${failure.line}: “${failure.text}”`,
-        'Export with semicolons or tabs between columns, or with a decimal point.',
-      );
-    case 'repeatedStamps':
-      return say(
-        `${counted(failure.count, 'row')} repeat a time with another reading.`,
-        `first at line ${failure.line}: “${failure.text}”`,
-        'The times may have lost their seconds, or the file lists several tags: export full times, choose the tag column, or read it without time.',
-      );
-    case 'unclosedQuote':
-      return say(
-        'A quotation mark is opened and never closed.',
-        `line ${failure.line}`,
-        'Set quoting to none below, or correct the line.',
       );
   }
 }

@@ -13,6 +13,7 @@ const span = v.pipe(
   v.object({ from: count, to: count }),
   v.check(({ from, to }) => from < to, 'a stretch ends after it begins'),
 );
+const words = v.pipe(v.array(text(100)), v.maxLength(100));
 const nullableColumn = v.nullable(count);
 
 const dialect = v.object({
@@ -29,13 +30,18 @@ const dialect = v.object({
   tag: v.nullable(text(200)),
   timeColumn: nullableColumn,
   clockColumn: nullableColumn,
+  stampColumns: v.optional(v.nullable(v.pipe(v.array(count), v.minLength(2), v.maxLength(6))), null),
   stamp: v.nullable(
     v.picklist(['iso', 'yearFirst', 'dayFirst', 'monthFirst', 'epochSeconds', 'epochMilliseconds', 'number']),
   ),
   zone: v.nullable(text(80)),
   valueColumn: count,
   status: v.nullable(v.object({ column: count, keep: v.pipe(v.array(text(100)), v.maxLength(50)) })),
-  gapWords: v.pipe(v.array(text(100)), v.maxLength(100)),
+  gapWords: words,
+  // Sessions written before these fields existed were read with none of the words, the first of repeated times, from text.
+  limitWords: v.optional(words, []),
+  repeats: v.optional(v.picklist(['first', 'last', 'gap']), 'first'),
+  sheet: v.optional(v.nullable(text(100)), null),
   grid: v.nullable(
     v.object({
       kind: v.picklist(['seconds', 'months', 'index']),

@@ -1,21 +1,7 @@
-import type { Dialect } from '../../workers/contract/dialect.ts';
 import type { Failure } from '../../workers/contract/failures.ts';
-import type { ReadingNote } from '../../workers/contract/reading.ts';
 import type { Axis } from '../../workers/contract/series.ts';
+import { plantReadings, type Reading } from './plantFixtures.ts';
 import { publishedSeries, type PublishedName } from '../helpers/publishedSeries.ts';
-
-/** What a record of e2e/fixtures must be read to; written by rule from a published series (generate/readingFixtures.mjs). */
-export interface Reading {
-  readonly file: string;
-  readonly values: Float64Array;
-  readonly axis: Axis;
-  readonly name?: string;
-  readonly unit?: string;
-  readonly notes?: Partial<Record<ReadingNote['kind'], number>>;
-  readonly asks?: readonly string[];
-  readonly settings?: Partial<Dialect>;
-  readonly detected?: Partial<Dialect>;
-}
 
 export interface Refusal {
   readonly file: string;
@@ -46,7 +32,7 @@ const usual = (file: string, more: Partial<Reading> = {}): Reading => ({
   ...more,
 });
 
-export const readings: readonly Reading[] = [
+const textReadings: readonly Reading[] = [
   usual('plain-comma-iso.csv', { detected: { delimiter: ',', decimal: '.', header: true, stamp: 'iso' } }),
   usual('semicolon-decimal-comma.csv', { detected: { delimiter: ';', decimal: ',' } }),
   usual('tab-separated.tsv', { detected: { delimiter: '\t' } }),
@@ -160,7 +146,7 @@ export const readings: readonly Reading[] = [
     // 26 October 2024 from 14:00 plant clock; 02:00 of the 27th comes twice, and the first stays.
     values: Float64Array.from([...hormone.slice(0, 13), ...hormone.slice(14)]),
     axis: seconds('2024-10-26T14:00', 3600),
-    notes: { duplicateTimes: 1, clockChange: 1 },
+    notes: { duplicateTimes: 1, conflictingTimes: 1, clockChange: 1 },
   }),
   usual('hour-twice-in-autumn.csv', {
     settings: { zone: 'Europe/Berlin' },
@@ -173,7 +159,12 @@ export const readings: readonly Reading[] = [
   usual('time-of-day-over-midnight.csv', { axis: seconds('1970-01-01T08:00', 3600), notes: { noDate: 24 } }),
   usual('stamp-that-is-no-date.csv', { values: without(hormone, 3), notes: { badStamps: 1, gapsInserted: 1 } }),
   usual('rows-left-out.csv', { values: without(hormone, 7, 8, 15), notes: { gapsInserted: 3 } }),
-  usual('rows-twice.csv', { notes: { duplicateTimes: 1 } }),
+  usual('rows-twice.csv', { notes: { duplicateTimes: 1, conflictingTimes: 1 } }),
+  usual('rows-twice.csv', {
+    settings: { repeats: 'gap' },
+    values: without(hormone, 6),
+    notes: { duplicateTimes: 1, conflictingTimes: 1 },
+  }),
   usual('newest-first.csv', { notes: { reversedTimes: 23 } }),
   usual('seconds-that-jitter.csv', { notes: { jitter: 21 } }),
   usual('interval-changes.csv', {
@@ -197,6 +188,8 @@ export const readings: readonly Reading[] = [
   usual('one-tag-after-the-other.csv', { name: 'LH-1', settings: { tag: 'LH-1' }, detected: { layout: 'long' } }),
 ];
 
+export const readings = [...textReadings, ...plantReadings];
+
 export const refusals: readonly Refusal[] = [
   { file: 'empty.csv', failure: { code: 'emptyFile' } },
   { file: 'blank-lines-only.csv', failure: { code: 'emptyFile' } },
@@ -206,7 +199,10 @@ export const refusals: readonly Refusal[] = [
   { file: 'one-value-throughout.csv', failure: { code: 'constantColumn', column: 'LH', value: 7 } },
   { file: 'gaps-only.csv', failure: { code: 'allGaps', column: 'LH', rows: 24 } },
   { file: 'photo.jpg', failure: { code: 'binaryFile', kind: 'JPEG picture' } },
-  { file: 'workbook.xlsx', failure: { code: 'binaryFile', kind: 'spreadsheet workbook (.xlsx)' } },
+  { file: 'workbook-cut-off.xlsx', failure: { code: 'workbookDamaged' } },
+  { file: 'workbook-of-words.xlsx', failure: { code: 'noNumbers', line: 2, column: 1, example: 'valve freed' } },
+  { file: 'workbook-that-would-fill-the-memory.xlsx', failure: { code: 'workbookTooLarge' } },
+  { file: 'table.ods', failure: { code: 'binaryFile', kind: 'spreadsheet workbook (.ods)' } },
   { file: 'machine-data.csv', failure: { code: 'binaryFile', kind: 'data that are not text' } },
   { file: 'day-or-month-open.csv', failure: { code: 'ambiguousDates', line: 2, text: '03/04/2024 08:00' } },
   {

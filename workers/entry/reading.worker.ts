@@ -1,6 +1,7 @@
 import { expose, transfer } from 'comlink';
 import type { ReadAnswer } from '../contract/reading.ts';
 import type { ReadingApi } from '../contract/workerApis.ts';
+import { joinFiles } from '../reading/files/joinFiles.ts';
 import { readRecord } from '../reading/readRecord.ts';
 
 /** The record's arrays move to the page instead of being copied. */
@@ -12,6 +13,14 @@ function withTransfers(answer: ReadAnswer): ReadAnswer {
 
 const api: ReadingApi = {
   ready: () => true,
+  join(request) {
+    try {
+      return joinFiles(request);
+    } catch (error) {
+      const message = error instanceof Error ? error.message : String(error);
+      return { ok: false, failure: { code: 'internal', message } };
+    }
+  },
   read(request, progress) {
     try {
       return withTransfers(readRecord(request, progress));

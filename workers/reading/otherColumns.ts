@@ -33,7 +33,7 @@ export function otherColumns(
       const rows = rowsOfTag(read, index)!;
       const own = gather(values, rows);
       if (index === tag || own.every((value) => Number.isNaN(value))) return [];
-      return [[name, fillGrid(own, placeOnGrid(gather(times, rows), own, found), rule)]];
+      return [[name, fillGrid(own, placeOnGrid(gather(times, rows), own, found, request.plan.dialect.repeats), rule)]];
     }),
   );
 }

@@ -1,48 +1,32 @@
 import type { Dialect } from '../contract/dialect.ts';
 import type { Failure } from '../contract/failures.ts';
 import type { ColumnProfile, Question, ReadAnswer, ReadingNote, ReadRequest } from '../contract/reading.ts';
+import { plainLines } from './files/plainLines.ts';
 import { noteOf } from './noteBook.ts';
 import { previewRows } from './previewRows.ts';
 import { readThoroughly, type ThoroughRead } from './readThoroughly.ts';
 import { chooseValueColumn } from './rows/chooseValueColumn.ts';
 import { profileColumns } from './rows/profileColumns.ts';
 import { rowShape, type RowsRead } from './rows/readRows.ts';
+import { timeColumns } from './rows/timeColumns.ts';
 import { takeRecord, type Taken } from './takeRecord.ts';
 
 /** Text characters in which a NUL says that this is no text. */
 const LOOKED_AT = 1 << 16;
 
-/** Whether a carriage return stands anywhere but before a line feed. */
-function hasLoneReturn(text: string): boolean {
-  for (let at = text.indexOf('\r'); at >= 0; at = text.indexOf('\r', at)) {
-    while (text.charCodeAt(at) === 13) at++;
-    if (text.charCodeAt(at) !== 10) return true;
-  }
-  return false;
-}
-
-/** Line feeds alone, without byte order mark. Carriage returns before a line feed are left to the row splitter. */
-function plainLines(text: string): string {
-  const bare = text.charCodeAt(0) === 0xfeff ? text.slice(1) : text;
-  if (!hasLoneReturn(bare)) return bare;
-  return bare.replace(/\r+\n?/gu, (run) => (run.endsWith('\n') ? '\n' : '\n'.repeat(run.length)));
-}
-
 /** A column number from the settings that the file does not have. */
 function absentColumn(settings: Partial<Dialect>, columns: number): Failure | null {
-  const { valueColumn, timeColumn, clockColumn, tagColumn, status } = settings;
-  const named = [valueColumn, timeColumn, clockColumn, tagColumn, status?.column];
+  const { valueColumn, timeColumn, clockColumn, tagColumn, status, stampColumns } = settings;
+  const named = [valueColumn, timeColumn, clockColumn, tagColumn, status?.column, ...(stampColumns ?? [])];
   const absent = named.find((column) => typeof column === 'number' && !(column >= 0 && column < columns));
   return typeof absent === 'number' ? { code: 'noSuchColumn', column: absent + 1, columns } : null;
 }
 
 function noNumbers({ found, read }: ThoroughRead, profiles: readonly ColumnProfile[]): Failure {
-  const { timeColumn, clockColumn } = found.plan.dialect;
-  const others = profiles.filter(({ index }) => index !== timeColumn && index !== clockColumn);
+  const times = timeColumns(found.plan.dialect);
+  const others = profiles.filter(({ index }) => !times.has(index));
   const silent = others.find(({ role }) => role === 'empty');
-  const wordy = read.columns.findIndex(
-    ({ oddTexts }, j) => j !== timeColumn && j !== clockColumn && oddTexts.length > 0,
-  );
+  const wordy = read.columns.findIndex(({ oddTexts }, j) => !times.has(j) && oddTexts.length > 0);
   if (wordy < 0 && silent !== undefined) return { code: 'allGaps', column: silent.name, rows: read.rows };
   const column = wordy < 0 ? 0 : wordy;
   const row = read.columns[column]?.oddRows[0] ?? 0;
@@ -142,14 +126,23 @@ export function readRecord(request: ReadRequest, progress?: (fraction: number) =
     failure = { code: 'decimalCommaClash', line: found.clash.line, text: found.clash.cells.join(',') };
   else if (wanted === null) failure = noNumbers(thorough, profiles);
   else {
-    taken = takeRecord({ plan, read, profiles, valueColumn: wanted, tag, grid: settings.grid ?? null });
+    taken = takeRecord({
+      plan,
+      read,
+      profiles,
+      valueColumn: wanted,
+      tag,
+      grid: settings.grid ?? null,
+      repeatsSettled: settings.repeats !== undefined,
+      parts: request.parts ?? [],
+    });
     failure = taken.failure;
     if (failure === null && open) failure = ambiguousDates(thorough);
   }
   const grid = taken?.grid ?? settings.grid ?? null;
   const tagName = read.tags === null ? null : (read.tagNames[tag] ?? null);
-  const { timeColumn, clockColumn } = plan.dialect;
-  const shown = wanted ?? profiles.find(({ index }) => index !== timeColumn && index !== clockColumn)?.index ?? 0;
+  const times = timeColumns(plan.dialect);
+  const shown = wanted ?? profiles.find(({ index }) => !times.has(index))?.index ?? 0;
   const dialect: Dialect = { ...plan.dialect, tag: tagName, valueColumn: shown, grid };
   const sniffed = {
     dialect,
@@ -158,6 +151,7 @@ export function readRecord(request: ReadRequest, progress?: (fraction: number) =
     rows: read.rows,
     questions: questionsOf(thorough, settings, chosen.column, chosen.others, read),
     ...(read.tags === null ? {} : { tags: read.tagNames }),
+    timing: taken?.timing ?? null,
   };
   progress?.(1);
   if (failure !== null || taken?.record == null || wanted === null) return { sniffed, record: null, failure };

@@ -1,6 +1,8 @@
 import type { Dialect, StampForm } from '../contract/dialect.ts';
 import { readRows, type RowsRead } from './rows/readRows.ts';
+import { timeColumns } from './rows/timeColumns.ts';
 import { sniffDialect, type Found } from './sniff/sniffDialect.ts';
+import { sniffStatus } from './sniff/sniffStatus.ts';
 import { columnCells } from './sniff/sniffTime.ts';
 import { exchangeDayMonth } from './stamps/exchangeDayMonth.ts';
 import { distinctTimes, findGrid } from './grid/findGrid.ts';
@@ -36,10 +38,10 @@ function regularOrder(times: Float64Array): 'own' | 'other' | 'open' {
 function blocksOfTags(read: RowsRead, found: Found): number {
   const { times } = read;
   if (times === null || read.rows < 8) return -1;
-  const { timeColumn, clockColumn } = found.plan.dialect;
+  const timeLike = timeColumns(found.plan.dialect);
   const wordy = read.columns.flatMap((column, j) => {
     const words = column.fewWords().length;
-    const apart = j !== timeColumn && j !== clockColumn && column.numbers === 0;
+    const apart = !timeLike.has(j) && column.numbers === 0;
     return apart && words >= 2 && words * 2 <= read.rows ? [j] : [];
   });
   if (wordy.length === 0) return -1;
@@ -52,7 +54,7 @@ function blocksOfTags(read: RowsRead, found: Found): number {
  * Reads a file, and reads it again where its later rows contradict what its head suggested.
  *
  * Method: after the pass over all rows, cells that no number was found in are tried as witnesses of another decimal mark; a
- * text column whose words go with repeated stamps makes the layout long; the order of day and month is settled by
+ * text column whose words go with repeated stamps makes the layout long; a column that marks rows as bad leaves them out; the order of day and month is settled by
  * the days above twelve anywhere in the file, else by the order that makes the record regular, else it stays open.
  *
  * @param text whole text; @param settings what the person has fixed
@@ -85,8 +87,19 @@ export function readThoroughly(
     const column = blocksOfTags(read, found);
     if (column >= 0) again({ layout: 'long', tagColumn: column });
   }
+  if (settings.status === undefined) {
+    const excluded = new Set([...timeColumns(found.plan.dialect), found.plan.dialect.tagColumn ?? -1]);
+    const names = found.headings.map(({ name }) => name);
+    const status = sniffStatus(read.columns, names, excluded);
+    if (status !== null) again({ status });
+  }
   const form = found.plan.dialect.stamp;
-  if (settings.stamp !== undefined || (form !== 'dayFirst' && form !== 'monthFirst') || read.times === null)
+  if (
+    found.plan.dialect.stampColumns !== null ||
+    settings.stamp !== undefined ||
+    (form !== 'dayFirst' && form !== 'monthFirst') ||
+    read.times === null
+  )
     return { found, read, openOrder: 'no' };
   const { own, other, open } = read.order;
   if (other > own) {

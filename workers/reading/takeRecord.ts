@@ -1,14 +1,17 @@
 import type { Dialect } from '../contract/dialect.ts';
 import type { Failure } from '../contract/failures.ts';
-import type { ColumnProfile, ReadingNote, ReadRecord } from '../contract/reading.ts';
+import type { ColumnProfile, JoinedPart, ReadingNote, ReadRecord, Timing } from '../contract/reading.ts';
 import { hashValues } from '../series/hashValues.ts';
 import { checkPlaces } from './grid/checkPlaces.ts';
 import { clockTurns } from './grid/clockTurns.ts';
 import { fillGrid } from './grid/fillGrid.ts';
 import { findGrid, type Grid, type GridFound } from './grid/findGrid.ts';
 import { placeOnGrid, type Placement } from './grid/placeOnGrid.ts';
+import { timingOf } from './grid/timingOf.ts';
+import { limitPlaces } from './limitPlaces.ts';
 import { noteOf } from './noteBook.ts';
 import { otherColumns } from './otherColumns.ts';
+import { overlapNote } from './overlapNote.ts';
 import { findRows } from './rows/findRows.ts';
 import { rowShape, type RowPlan, type RowsRead } from './rows/readRows.ts';
 import { columnValues, gather, rowsOfTag } from './selectRows.ts';
@@ -20,6 +23,8 @@ export const NEEDED_READINGS = 8;
 const MOST_BAD_STAMPS = 0.2;
 /** Stamps off the grid beyond this share: the record has no regular axis. */
 const MOST_OFF_GRID = 0.1;
+/** The same where the person has settled the grid or which row is to stay: then it is left out or settled as asked. */
+const MOST_OFF_CHOSEN = 0.5;
 /** Rows that repeat a stamp with another reading beyond this share: it is not known which to keep. */
 const MOST_CONFLICTS = 0.2;
 const INDEX_GRID: Grid = { kind: 'index', step: 1, rule: 'nearest', tolerance: 0.25 };
@@ -32,6 +37,9 @@ export interface TakeRequest {
   readonly valueColumn: number;
   readonly tag: number;
   readonly grid: Dialect['grid'];
+  /** Whether the person has said which of two readings of one time stays. */
+  readonly repeatsSettled: boolean;
+  readonly parts: readonly JoinedPart[];
 }
 
 /** The record, or why there is none; with the rows that did not fit, for the preview. */
@@ -45,6 +53,7 @@ export interface Taken {
   readonly reversed: readonly number[];
   /** Stamps as the axis counts them, one a row of the file. */
   readonly times: Float64Array | null;
+  readonly timing: Timing | null;
 }
 
 /** Rows on their grid. */
@@ -79,7 +88,7 @@ function absentPlaces({ owner }: Placement): { count: number; rows: number[] } {
   let count = 0;
   const rows: number[] = [];
   for (let k = 0; k < owner.length; k++) {
-    if (owner[k]! >= 0) continue;
+    if (owner[k]! !== -1) continue;
     count++;
     if (k + 1 < owner.length && owner[k + 1]! >= 0 && rows.length < 8) rows.push(owner[k + 1]!);
   }
@@ -90,6 +99,9 @@ function absentPlaces({ owner }: Placement): { count: number; rows: number[] } {
 class Taking {
   readonly notes: (ReadingNote | null)[] = [];
   times: Float64Array | null = null;
+  timing: Timing | null = null;
+  /** The grid tried, also where the rows do not lie on it. */
+  grid: Grid | null = null;
   readonly values: Float64Array;
   readonly name: string;
   readonly rows: Int32Array | null;
@@ -128,13 +140,19 @@ class Taking {
     const found = findGrid(stamps, plan.dialect.stamp !== 'number', this.request.grid);
     const rows = stamps.length;
     if (found === null) return { code: 'noRegularAxis', rows, interval: 0, offGrid: rows };
+    this.grid = found.grid;
     const tooLong = checkPlaces(stamps, found);
-    if (tooLong !== null)
+    if (tooLong !== null) {
+      this.timing = timingOf(stamps, found, null, true);
       return { code: 'gridTooLong', places: tooLong.places, limit: tooLong.limit, line: this.lineOf(tooLong.row) };
-    const placement = placeOnGrid(stamps, this.values, found);
+    }
+    const { repeats } = plan.dialect;
+    const placement = placeOnGrid(stamps, this.values, found, repeats);
+    const chosen = this.request.grid !== null;
+    this.timing = timingOf(stamps, found, placement, chosen);
     const { conflictCount, offGridCount } = placement;
-    if (conflictCount > MOST_CONFLICTS * rows) return this.repeated(placement);
-    if (offGridCount > MOST_OFF_GRID * rows)
+    if (conflictCount > MOST_CONFLICTS * rows && !this.request.repeatsSettled) return this.repeated(placement);
+    if (offGridCount > (chosen ? MOST_OFF_CHOSEN : MOST_OFF_GRID) * rows)
       return { code: 'noRegularAxis', rows, interval: found.grid.step, offGrid: offGridCount };
     this.noteTimes(stamps, found, placement, time.zone);
     return { found, placement, zone: time.zone };
@@ -163,10 +181,15 @@ class Taking {
     this.notes.push(
       noteOf('gapsInserted', absent.count, lines(absent.rows)),
       noteOf('duplicateTimes', placement.duplicateCount, lines(placement.duplicates)),
+      noteOf('conflictingTimes', placement.conflictCount, lines(placement.conflicts), [
+        this.request.plan.dialect.repeats,
+      ]),
+      noteOf('sharedPlaces', placement.sharedCount, [], [found.grid.rule]),
       noteOf('reversedTimes', placement.reversedCount, lines(placement.reversed)),
       noteOf('jitter', placement.jitterCount, [], [placement.jitter.toPrecision(2)]),
       noteOf('offGrid', placement.offGridCount, lines(placement.offGrid)),
     );
+    this.notes.push(overlapNote(stamps, (row) => this.lineOf(row), this.request.parts));
     if (zone !== null) return;
     const turned = clockTurns(stamps, placement, found.grid);
     this.notes.push(noteOf('clockChange', turned.length, lines(turned)));
@@ -193,7 +216,9 @@ export function takeRecord(request: TakeRequest): Taken {
   const { times, name } = taking;
   const notes = () => taking.notes.filter((note) => note !== null);
   const failed = (failure: Failure): Taken => {
-    return { record: null, grid: null, offGrid: [], duplicates: [], reversed: [], failure, times, notes: notes() };
+    const { grid, timing } = taking;
+    const places = { offGrid: [], duplicates: [], reversed: [] };
+    return { record: null, grid, ...places, failure, times, notes: notes(), timing };
   };
   if ('code' in laid) return failed(laid);
   const { found, placement, zone } = laid;
@@ -206,7 +231,14 @@ export function takeRecord(request: TakeRequest): Taken {
   const columns = otherColumns(request, found, placement, times);
   const fileRows = (list: readonly number[]) => list.map((row) => taking.fileRow(row));
   return {
-    record: { series, name, columns, notes: [], rows: taking.values.length },
+    record: {
+      series,
+      name,
+      columns,
+      notes: [],
+      rows: taking.values.length,
+      limitPlaces: limitPlaces(request.read.columns[request.valueColumn]!, taking.rows, placement, values),
+    },
     grid: found.grid,
     failure: null,
     notes: notes(),
@@ -214,5 +246,6 @@ export function takeRecord(request: TakeRequest): Taken {
     duplicates: fileRows(placement.duplicates),
     reversed: fileRows(placement.reversed),
     times,
+    timing: taking.timing,
   };
 }

@@ -473,12 +473,4 @@ put('three-readings.csv', lines(['time,LH', ...rows(hormone.slice(0, 3), iso)]))
 put('one-value-throughout.csv', lines(['time,LH', ...rows(hormone, iso, () => '7.0')]));
 put('gaps-only.csv', lines(['time,LH', ...rows(hormone, iso, () => '')]));
 put('photo.jpg', Buffer.from([0xff, 0xd8, 0xff, 0xe0, 0, 16, 0x4a, 0x46, 0x49, 0x46, 0, 1, 1, 0, 0, 1, 0, 1, 0, 0]));
-put(
-  'workbook.xlsx',
-  Buffer.concat([
-    Buffer.from([0x50, 0x4b, 3, 4, 20, 0, 0, 0, 8, 0]),
-    Buffer.alloc(20),
-    Buffer.from('[Content_Types].xml xl/workbook.xml'),
-  ]),
-);
 put('machine-data.csv', Buffer.from(Float64Array.from(hormone).buffer));

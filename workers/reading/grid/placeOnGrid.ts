@@ -1,3 +1,4 @@
+import type { Dialect } from '../../contract/dialect.ts';
 import { monthOf } from './findMonths.ts';
 import type { GridFound } from './findGrid.ts';
 
@@ -6,15 +7,18 @@ export interface Placement {
   readonly places: number;
   /** Place of each row; −1 where its stamp is unreadable or off the grid. */
   readonly at: Int32Array;
-  /** Row whose reading stands at each place (rule `nearest` and `last`); −1 for none. */
+  /** Row whose reading stands at each place (rule `nearest` and `last`); −1 for none, −2 where rows contradict and none is kept. */
   readonly owner: Int32Array;
   readonly offGrid: number[];
   readonly duplicates: number[];
   readonly reversed: number[];
+  readonly conflicts: number[];
   readonly offGridCount: number;
   readonly duplicateCount: number;
   /** Duplicates whose stamp equals that of the row before them while the readings differ. */
   readonly conflictCount: number;
+  /** Rows that came to a place taken by a row of another time (`binMean`, `last`): averaged in, or one of the two dropped. */
+  readonly sharedCount: number;
   readonly reversedCount: number;
   /** Rows that are on the grid though not exactly, and the largest distance as a fraction of the step. */
   readonly jitterCount: number;
@@ -36,13 +40,24 @@ const ROUNDING = 1e-6;
  * @param times stamps in seconds or counts, in the order of the file; NaN where unreadable
  * @param values readings of the same rows, NaN where there is none
  * @param found grid, first point, number of places
+ * @param repeats which of two rows of one stamp with different readings stays; `gap`: neither
  * @returns place of every row, row of every place, and what did not fit
  */
-export function placeOnGrid(times: Float64Array, values: Float64Array, found: GridFound): Placement {
+export function placeOnGrid(
+  times: Float64Array,
+  values: Float64Array,
+  found: GridFound,
+  repeats: Dialect['repeats'] = 'first',
+): Placement {
   const { grid, start, places } = found;
   const at = new Int32Array(times.length).fill(-1);
   const owner = new Int32Array(places).fill(-1);
-  const [offGrid, duplicates, reversed]: [number[], number[], number[]] = [[], [], []];
+  const offGrid: number[] = [];
+  const duplicates: number[] = [];
+  const reversed: number[] = [];
+  const conflicts: number[] = [];
+  const contradicted = new Set<number>();
+  let sharedCount = 0;
   let [offGridCount, duplicateCount, conflictCount, reversedCount, jitterCount, jitter] = [0, 0, 0, 0, 0, 0];
   const keep = (list: number[], row: number) => {
     if (list.length < PLACES_KEPT) list.push(row);
@@ -81,21 +96,26 @@ export function placeOnGrid(times: Float64Array, values: Float64Array, found: Gr
       if (grid.rule === 'nearest') distance[place] = off;
       continue;
     }
+    const repeated = time === times[held]!;
+    if (repeated && Math.abs(values[row]! - values[held]!) > 0) {
+      conflictCount++;
+      keep(conflicts, row);
+      if (repeats === 'gap') contradicted.add(place);
+    }
+    if (repeated || grid.rule === 'nearest') {
+      duplicateCount++;
+      keep(duplicates, row);
+    } else sharedCount++;
+    const [missing, given] = [Number.isNaN(values[held]!), !Number.isNaN(values[row]!)];
+    if (!given) continue;
     if (grid.rule === 'nearest') {
-      duplicateCount++;
-      keep(duplicates, row);
-      if (time === times[held]! && Math.abs(values[row]! - values[held]!) > 0) conflictCount++;
-      const [missing, given] = [Number.isNaN(values[held]!), !Number.isNaN(values[row]!)];
-      const nearer = off < distance[place]! - rounding && given;
-      if ((missing && given) || nearer) {
-        owner[place] = row;
-        distance[place] = off;
-      }
-    } else if (time === times[held]!) {
-      duplicateCount++;
-      keep(duplicates, row);
-    } else if (time > times[held]! && !Number.isNaN(values[row]!)) owner[place] = row;
+      const nearer = off < distance[place]! - rounding;
+      if (!missing && !nearer && !(repeated && repeats === 'last')) continue;
+      distance[place] = off;
+      owner[place] = row;
+    } else if (missing || time > times[held]! || (repeated && repeats === 'last')) owner[place] = row;
   }
-  const counts = { offGridCount, duplicateCount, conflictCount, reversedCount, jitterCount };
-  return { places, at, owner, offGrid, duplicates, reversed, jitter, ...counts };
+  for (const place of contradicted) owner[place] = -2;
+  const counts = { offGridCount, duplicateCount, conflictCount, sharedCount, reversedCount, jitterCount };
+  return { places, at, owner, offGrid, duplicates, reversed, conflicts, jitter, ...counts };
 }

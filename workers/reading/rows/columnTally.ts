@@ -1,8 +1,10 @@
 import type { CellKind, CellReader } from '../cells/cellReader.ts';
-import { GrowingFloats } from './growable.ts';
+import { GrowingFloats, GrowingInts } from './growable.ts';
 
 /** Distinct texts remembered of a column; with more it is free text. */
 const WORDS_KEPT = 200;
+/** Distinct cells counted of a column, numbers among them; a status column has no more. */
+const CELLS_KEPT = 24;
 /** Letters of a text remembered. */
 const LETTERS_KEPT = 60;
 /** Places of odd cells remembered, to show. */
@@ -22,6 +24,10 @@ export class ColumnTally {
   readonly limitRows: number[] = [];
   readonly limitTexts: string[] = [];
   readonly words = new Map<string, number>();
+  /** Rows with a value below a detection limit. */
+  readonly limits = new GrowingInts();
+  private readonly cells = new Map<string, number>();
+  private many = false;
   private readonly suffix: string;
 
   constructor(suffix: string) {
@@ -30,6 +36,7 @@ export class ColumnTally {
 
   /** Takes a cell of row `row`; undefined: the row is too short to have it. */
   take(cell: string | undefined, row: number, reader: CellReader): void {
+    if (!this.many && cell !== undefined) this.count(cell);
     const kind: CellKind = cell === undefined ? 'gap' : reader.read(cell, this.suffix);
     if (kind === 'number') {
       this.numbers++;
@@ -45,6 +52,7 @@ export class ColumnTally {
     const bare = cell!.trim().slice(0, LETTERS_KEPT);
     if (kind === 'belowLimit') {
       this.belowLimit++;
+      this.limits.push(row);
       if (this.limitRows.length < PLACES_KEPT) this.limitRows.push(row);
       if (this.limitTexts.length < PLACES_KEPT && !this.limitTexts.includes(bare)) this.limitTexts.push(bare);
       return;
@@ -53,6 +61,18 @@ export class ColumnTally {
     if (this.oddRows.length < PLACES_KEPT) this.oddRows.push(row);
     if (this.oddTexts.length < PLACES_KEPT && !this.oddTexts.includes(bare)) this.oddTexts.push(bare);
     if (this.words.size <= WORDS_KEPT) this.words.set(bare, (this.words.get(bare) ?? 0) + 1);
+  }
+
+  private count(cell: string): void {
+    const text = cell.trim().slice(0, LETTERS_KEPT);
+    const before = this.cells.get(text);
+    if (before === undefined && this.cells.size === CELLS_KEPT) this.many = true;
+    else this.cells.set(text, (before ?? 0) + 1);
+  }
+
+  /** Every distinct cell with its count, where they are few; null where they are many. */
+  distinctCells(): ReadonlyMap<string, number> | null {
+    return this.many ? null : this.cells;
   }
 
   /** Few distinct texts, such as a status or a tag column has; free text gives none. */

@@ -1,11 +1,10 @@
-import type { Dialect } from '../../contract/dialect.ts';
 import type { ColumnProfile } from '../../contract/reading.ts';
 import type { Heading } from '../sniff/headingName.ts';
+import { statusName } from '../sniff/sniffStatus.ts';
 import type { ColumnTally } from './columnTally.ts';
 import type { RowPlan, RowsRead } from './readRows.ts';
+import { timeColumns } from './timeColumns.ts';
 
-const statusName =
-  /^(?:status|state|quality|qual|qc|flag|flags|valid|validity|good|ok|q|güte|qualit[ée]|estado|stato)\b/iu;
 /** A column with as many numbers as other texts, or more, is numeric. */
 const NUMERIC_SHARE = 0.5;
 
@@ -28,8 +27,8 @@ function distinctNames(headings: readonly Heading[]): string[] {
 }
 
 function roleOf(column: ColumnTally, index: number, name: string, dialect: RowPlan['dialect']): ColumnProfile['role'] {
-  if (index === dialect.timeColumn) return 'time';
   if (index === dialect.clockColumn) return 'clock';
+  if (timeColumns(dialect).has(index)) return 'time';
   if (index === dialect.tagColumn) return 'tag';
   if (index === dialect.status?.column) return 'status';
   if (column.numbers + column.texts + column.belowLimit === 0) return 'empty';
@@ -45,11 +44,12 @@ function roleOf(column: ColumnTally, index: number, name: string, dialect: RowPl
  * @returns one profile a column, counts over all rows; the unit that every number carries stands in for a missing heading
  */
 export function profileColumns(read: RowsRead, plan: RowPlan, headings: readonly Heading[]): ColumnProfile[] {
-  const dialect: Pick<Dialect, 'timeColumn' | 'clockColumn'> = plan.dialect;
+  const times = timeColumns(plan.dialect);
   const names = distinctNames(headings);
   return read.columns.map((column, index) => {
     const { unit } = headings[index]!;
-    const isTime = index === dialect.timeColumn || index === dialect.clockColumn;
+    const isTime = times.has(index);
+    const cells = isTime ? null : column.distinctCells();
     const words = index === plan.dialect.tagColumn ? read.tagNames : column.fewWords();
     return {
       index,
@@ -60,6 +60,7 @@ export function profileColumns(read: RowsRead, plan: RowPlan, headings: readonly
       texts: isTime ? read.badStampCount : column.texts + column.belowLimit,
       role: roleOf(column, index, names[index]!, plan.dialect),
       ...(words.length > 0 ? { words } : {}),
+      ...(cells !== null && cells.size > 1 ? { cells: [...cells].map(([text, count]) => ({ text, count })) } : {}),
     };
   });
 }

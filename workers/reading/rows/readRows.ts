@@ -1,10 +1,12 @@
 import type { Dialect, StampForm } from '../../contract/dialect.ts';
+import { joinStampParts } from '../stamps/joinStampParts.ts';
 import { CellReader } from '../cells/cellReader.ts';
 import { StampReader, type OrderTally } from '../stamps/stampReader.ts';
 import { isRule } from '../sniff/sniffLayout.ts';
 import { ColumnTally } from './columnTally.ts';
 import { GrowingFloats, GrowingInts } from './growable.ts';
 import { splitRows } from './splitRows.ts';
+import { timeColumns } from './timeColumns.ts';
 
 /** Everything known about a file before its rows are read in earnest. */
 export interface RowPlan {
@@ -91,9 +93,12 @@ class RowCollector {
   private readonly cells: CellReader;
   private readonly keep: ReadonlySet<string>;
   private readonly plan: RowPlan;
+  private readonly isTime: readonly boolean[];
 
   constructor(plan: RowPlan) {
     this.plan = plan;
+    const times = timeColumns(plan.dialect);
+    this.isTime = plan.suffixes.map((_, j) => times.has(j));
     this.columns = plan.suffixes.map((suffix) => new ColumnTally(suffix));
     this.stamps = new StampReader((plan.dialect.stamp ?? 'number') satisfies StampForm, plan.dialect.decimal);
     this.cells = new CellReader(plan.dialect);
@@ -120,14 +125,14 @@ class RowCollector {
     if (dialect.tagColumn !== null) this.takeTag(cells[dialect.tagColumn]?.trim() ?? '');
     if (dialect.status !== null) this.out.push(this.keep.has(cells[dialect.status.column]?.trim() ?? '') ? 0 : 1);
     for (let j = 0; j < columns; j++) {
-      if (j === dialect.timeColumn || j === dialect.clockColumn) continue;
+      if (this.isTime[j]!) continue;
       this.columns[j]!.take(shape === rowShape.long ? undefined : cells[j], row, this.cells);
     }
   }
 
   private takeStamp(cells: string[], line: number, row: number): void {
-    const { timeColumn, clockColumn } = this.plan.dialect;
-    let text = cells[timeColumn!] ?? '';
+    const { timeColumn, clockColumn, stampColumns } = this.plan.dialect;
+    let text = stampColumns === null ? (cells[timeColumn!] ?? '') : joinStampParts(cells, stampColumns);
     if (clockColumn !== null) text = `${text.trim()} ${cells[clockColumn] ?? ''}`;
     const time = this.stamps.read(text);
     this.times.push(time);

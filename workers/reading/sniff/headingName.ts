@@ -14,7 +14,7 @@ const known = new Set(
     '% ‰ ph ppm ppb ppmv c °c degc f °f degf k bar mbar barg bara pa hpa kpa mpa psi psig atm mmhg m mm cm km µm um m² m2 m³ ' +
     'm3 m³/h m3/h nm³/h nm3/h l ml l/s l/min l/h kg g mg µg t kg/h t/h kg/s kg/m³ kg/m3 g/l mg/l µg/l mol mol/l mmol/l h min s ms d ' +
     'v mv kv a ma w kw mw kwh mwh wh j kj mj gj hz khz rpm 1/min n nm knm db lx ntu µs/cm us/cm ms/cm m/s m/s² – - 1 iu/l ' +
-    'pcs st stk ppt s/m cp mpas pa·s w/m² kj/kg €/mwh'
+    'pcs st stk ppt s/m cp mpas pa·s w/m² kj/kg €/mwh yr mo dy hr mn sec ft'
   ).split(' '),
 );
 
@@ -26,7 +26,7 @@ export function looksLikeUnit(text: string): boolean {
     .trim();
   if (bare === '') return false;
   if (bare.length < text.trim().length) return true;
-  if (known.has(bare.toLowerCase())) return true;
+  if (known.has(bare.toLowerCase().replace(/^#/u, ''))) return true;
   return bare.length <= 12 && /[°%‰µμ²³/·^]/u.test(bare) && !/\s/u.test(bare);
 }
 

@@ -1,7 +1,9 @@
 import type { Dialect, StampForm } from '../../contract/dialect.ts';
 import type { Question } from '../../contract/reading.ts';
 import { defaultGapWords } from '../cells/gapWords.ts';
+import { defaultLimitWords } from '../cells/limitWords.ts';
 import type { RowPlan } from '../rows/readRows.ts';
+import { timeColumns } from '../rows/timeColumns.ts';
 import { isZone } from '../stamps/zoneResolver.ts';
 import { cellClass } from './cellClass.ts';
 import { headingName, type Heading } from './headingName.ts';
@@ -98,7 +100,8 @@ export function sniffDialect(text: string, settings: Partial<Dialect>, more: rea
 
   const heading = alignedHeading(layout, time.clockColumn, time.timeColumn);
   const headings = Array.from({ length: columns }, (_, j) => headingName(heading[j] ?? '', layout.units[j] ?? '', j));
-  const words = numeric.filter((j) => j !== time.timeColumn && j !== time.clockColumn && isWordColumn(body, j));
+  const times = timeColumns(time);
+  const words = numeric.filter((j) => !times.has(j) && isWordColumn(body, j));
   const tagColumn =
     settings.tagColumn !== undefined
       ? settings.tagColumn
@@ -120,10 +123,14 @@ export function sniffDialect(text: string, settings: Partial<Dialect>, more: rea
     tag: settings.tag ?? null,
     timeColumn: time.timeColumn,
     clockColumn: time.clockColumn,
+    stampColumns: time.stampColumns,
     stamp: time.stamp,
     zone: settings.zone != null && isZone(settings.zone) ? settings.zone : null,
     status: settings.status ?? null,
     gapWords: settings.gapWords ?? defaultGapWords,
+    limitWords: settings.limitWords ?? defaultLimitWords,
+    repeats: settings.repeats ?? 'first',
+    sheet: settings.sheet ?? null,
   };
   const from = afterLines(text, layout.preambleLines);
   const plan = { text, dialect, from, line: layout.preambleLines + 1, columns, suffixes };

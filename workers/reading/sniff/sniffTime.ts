@@ -1,6 +1,7 @@
 import type { Dialect, StampForm } from '../../contract/dialect.ts';
 import { parseNumber } from '../cells/parseNumber.ts';
 import type { HeadRow } from './headRows.ts';
+import { sniffStampColumns } from './sniffStampColumns.ts';
 import { sniffStampForm, type FormFound } from './sniffStampForm.ts';
 
 /** Where time stands in a file. `others`: further columns that could be the time. */
@@ -8,14 +9,36 @@ export interface TimeFound {
   readonly timeColumn: number | null;
   readonly clockColumn: number | null;
   readonly stamp: StampForm | null;
+  readonly stampColumns: readonly number[] | null;
   readonly others: readonly number[];
   /** Forms that read the stamps as well as `stamp` does. */
   readonly rivals: readonly StampForm[];
 }
 
+const noTime: TimeFound = {
+  timeColumn: null,
+  clockColumn: null,
+  stampColumns: null,
+  stamp: null,
+  others: [],
+  rivals: [],
+};
 const SAMPLE = 200;
 const timeName =
   /^(?:t|time|zeit|temps|tiempo|tempo|tijd|elapsed.*|seconds?|secs?|s|min|mins|minutes?|hours?|hrs?|h|days?)(?:\W.*)?$/iu;
+
+/** Time from parts in columns of their own, with the time of day beside them where that is written as a clock. */
+function fromParts(
+  parts: readonly number[],
+  forms: readonly (FormFound | null)[],
+  settings: Partial<Dialect>,
+): TimeFound {
+  const isClock = (j: number) => forms[j]?.clock === true && !forms[j].date && !parts.includes(j);
+  const beside = parts.length === 3 ? forms.findIndex((_, j) => isClock(j)) : -1;
+  const clockColumn = settings.clockColumn !== undefined ? settings.clockColumn : beside < 0 ? null : beside;
+  const own = { timeColumn: parts[0]!, clockColumn, stampColumns: parts };
+  return { ...own, stamp: settings.stamp ?? 'yearFirst', others: [], rivals: [] };
+}
 
 /** Cells of a column as a sample, blanks left out. */
 export function columnCells(body: readonly HeadRow[], column: number): string[] {
@@ -43,7 +66,7 @@ function isCounter(cells: readonly string[], name: string, decimal: '.' | ','): 
 /**
  * The time column, the column with the time of day where date and time are apart, and how the stamps are written.
  *
- * Method: columns of calendar stamps go first, from the left; then a time of day alone; then epoch counts; then a plain
+ * Method: year, month and day in columns of their own; then columns of calendar stamps, from the left; then a time of day alone; then epoch counts; then a plain
  * count. Settings of the person go before all of it, and the rest is detected around them.
  *
  * @param body data rows of the head; @param columns their number; @param names headings, as many or fewer
@@ -57,18 +80,25 @@ export function sniffTime(
   decimal: '.' | ',',
   settings: Partial<Dialect>,
 ): TimeFound {
-  if (settings.timeColumn === null) return { timeColumn: null, clockColumn: null, stamp: null, others: [], rivals: [] };
+  if (settings.timeColumn === null) return noTime;
   const cells = Array.from({ length: columns }, (_, j) => columnCells(body, j));
   const forms = cells.map((column, j) => sniffStampForm(column, names[j] ?? ''));
   const isDated = (found: FormFound | null) => found !== null && found.date && !found.form.startsWith('epoch');
   const isClock = (found: FormFound | null) => found !== null && found.clock && !found.date;
+  const parts =
+    settings.stampColumns !== undefined
+      ? settings.stampColumns
+      : settings.timeColumn === undefined
+        ? sniffStampColumns(body, columns, names)
+        : null;
+  if (parts !== null && parts.length > 1) return fromParts(parts, forms, settings);
   const dated = forms.flatMap((found, j) => (isDated(found) ? [j] : []));
   const clocks = forms.flatMap((found, j) => (isClock(found) ? [j] : []));
   const epochs = forms.flatMap((found, j) => (found !== null && found.form.startsWith('epoch') ? [j] : []));
   const counters = cells.flatMap((column, j) => (isCounter(column, names[j] ?? '', decimal) ? [j] : []));
   const several = columns > 1;
   const time = settings.timeColumn ?? dated[0] ?? clocks[0] ?? (several ? (epochs[0] ?? counters[0]) : undefined);
-  if (time === undefined) return { timeColumn: null, clockColumn: null, stamp: null, others: [], rivals: [] };
+  if (time === undefined) return noTime;
   const found = forms[time] ?? null;
   let clockColumn = settings.clockColumn ?? null;
   if (settings.clockColumn === undefined && found !== null && found.date && !found.clock)
@@ -76,6 +106,7 @@ export function sniffTime(
   return {
     timeColumn: time,
     clockColumn,
+    stampColumns: null,
     stamp: settings.stamp ?? found?.form ?? 'number',
     others: dated.filter((j) => j !== time),
     rivals: found?.rivals ?? [],

@@ -1,0 +1,71 @@
+import type { Timing } from '../../contract/reading.ts';
+import type { Grid, GridFound } from './findGrid.ts';
+import { distinctTimes } from './findGrid.ts';
+import { niceStep } from './niceStep.ts';
+import type { Placement } from './placeOnGrid.ts';
+
+const KEPT = 8;
+/** Distances this near to the step, as a fraction of it, are the step. */
+const SAME = 1e-6;
+
+/** How often each distance between neighbours occurs, to 6 digits. */
+function countIntervals(distinct: Float64Array): Map<number, number> {
+  const counts = new Map<number, number>();
+  for (let i = 1; i < distinct.length; i++) {
+    const interval = Number((distinct[i]! - distinct[i - 1]!).toPrecision(6));
+    counts.set(interval, (counts.get(interval) ?? 0) + 1);
+  }
+  return counts;
+}
+
+/** The grid in use first, then the other rules with its step, and bins wide enough that hardly one is empty. */
+function offersFor(grid: Grid, distinct: Float64Array): Grid[] {
+  const offers: Grid[] = [grid];
+  const add = (offer: Grid) => {
+    if (!offers.some(({ rule, step }) => rule === offer.rule && Math.abs(step - offer.step) <= SAME * step))
+      offers.push(offer);
+  };
+  const wide = grid.kind === 'seconds' ? niceStep(distinct) : null;
+  for (const step of [grid.step, ...(wide === null ? [] : [wide])])
+    for (const rule of ['nearest', 'binMean', 'last'] as const)
+      if (rule !== 'nearest' || step === grid.step) add({ ...grid, step, rule });
+  return offers;
+}
+
+/**
+ * How the stamps follow one another, and which grids can be laid under them.
+ *
+ * Method: distances between neighbouring distinct stamps are counted; where rows jitter, repeat, lie off the grid or lie at
+ * several distances, or where the person has chosen a grid, every rule is offered at the step in use, and the mean and the
+ * last reading of the narrowest usual bin of which nine in ten hold a stamp.
+ *
+ * @param times stamps of the record, any order; @param found its grid; @param placement its rows on it; null where it failed
+ * @param chosen whether the person has settled the grid
+ * @returns the report; months are counted in seconds between stamps, as written
+ */
+export function timingOf(times: Float64Array, found: GridFound, placement: Placement | null, chosen: boolean): Timing {
+  const distinct = distinctTimes(times);
+  const counts = countIntervals(distinct);
+  const { grid } = found;
+  const intervals = [...counts]
+    .sort((a, b) => b[1] - a[1] || a[0] - b[0])
+    .slice(0, KEPT)
+    .map(([interval, count]) => ({ interval, count }));
+  let regular = 0;
+  for (const [interval, count] of counts) if (Math.abs(interval - grid.step) <= SAME * grid.step) regular += count;
+  const count = distinct.length - 1;
+  const monthly = grid.kind === 'months';
+  const varies = monthly ? found.bad > 0 : regular < 0.9 * count;
+  const odd = placement === null || placement.jitterCount + placement.offGridCount + placement.duplicateCount > 0;
+  return {
+    kind: grid.kind,
+    intervals,
+    count,
+    regular: monthly ? count - found.bad : regular,
+    jitter: placement?.jitter ?? 0,
+    offGrid: placement?.offGridCount ?? found.bad,
+    repeats: placement?.duplicateCount ?? 0,
+    reversals: placement?.reversedCount ?? 0,
+    offers: varies || odd || chosen ? offersFor(grid, distinct) : [],
+  };
+}
