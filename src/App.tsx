@@ -45,9 +45,9 @@ export function App() {
     const drop = (event: DragEvent) => {
       event.preventDefault();
       setOver(false);
-      const file = event.dataTransfer?.files[0];
+      const files = [...(event.dataTransfer?.files ?? [])];
       const text = event.dataTransfer?.getData('text/plain') ?? '';
-      if (file !== undefined) void actions.openFile(file);
+      if (files.length > 0) void actions.openFiles(files);
       else if (text !== '') void actions.openText(text, 'dropped text');
     };
     addEventListener('dragover', enter);

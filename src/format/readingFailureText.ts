@@ -16,6 +16,12 @@ export function readingFailureText(failure: ReadingFailure): FailureText {
   switch (failure.code) {
     case 'emptyFile':
       return say('The file is empty.', '', 'Export it again and open it anew. What was open is kept.');
+    case 'fileUnreadable':
+      return say(
+        'The file cannot be read from the disk.',
+        failure.reason,
+        'It may have been moved, or another program holds it: close it there and open it anew. What was open is kept.',
+      );
     case 'binaryFile':
       return say(
         `This is not a text file (${failure.kind}).`,

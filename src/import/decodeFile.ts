@@ -22,14 +22,14 @@ async function decode(
   file: Blob,
   encoding: Dialect['encoding'],
   strict: boolean,
-  each: (bytes: Uint8Array) => void,
+  each: (bytes: Uint8Array, done: number) => void,
 ): Promise<string | null> {
   const decoder = new TextDecoder(encoding, { fatal: strict });
   const parts: string[] = [];
   try {
     for (let from = 0; from < file.size; from += PIECE) {
       const bytes = new Uint8Array(await file.slice(from, from + PIECE).arrayBuffer());
-      each(bytes);
+      each(bytes, (from + bytes.length) / file.size);
       parts.push(decoder.decode(bytes, { stream: true }));
     }
     parts.push(decoder.decode());
@@ -49,9 +49,14 @@ async function decode(
  *
  * @param file a dropped or picked file
  * @param wanted encoding the person has fixed; then it is used whatever the bytes say
+ * @param progress called with the fraction done after each piece; what it throws ends the work
  * @returns the text, or `emptyFile`, `binaryFile`, `fileTooLarge`
  */
-export async function decodeFile(file: Blob, wanted?: Dialect['encoding']): Promise<Result<DecodedFile>> {
+export async function decodeFile(
+  file: Blob,
+  wanted?: Dialect['encoding'],
+  progress?: (fraction: number) => void,
+): Promise<Result<DecodedFile>> {
   if (file.size === 0) return { ok: false, failure: { code: 'emptyFile' } };
   if (file.size > LARGEST_FILE)
     return { ok: false, failure: { code: 'fileTooLarge', bytes: file.size, limit: LARGEST_FILE } };
@@ -62,17 +67,18 @@ export async function decodeFile(file: Blob, wanted?: Dialect['encoding']): Prom
   if (kind !== null) return { ok: false, failure: { code: 'binaryFile', kind } };
   const hasher = new FileHasher();
   let hashed = 0;
-  const hash = (bytes: Uint8Array) => {
+  const hash = (bytes: Uint8Array, done: number) => {
     hasher.add(bytes);
     hashed += bytes.length;
+    progress?.(done);
   };
   const text = await decode(file, encoding, wanted === undefined && encoding === 'utf-8', hash);
   if (text !== null) return { ok: true, value: { text, encoding, hash: hasher.digest() } };
   // What was hashed before the offending piece, and that piece, stay; the rest follows.
   let seen = 0;
-  const older = await decode(file, 'windows-1252', false, (bytes) => {
+  const older = await decode(file, 'windows-1252', false, (bytes, done) => {
     seen += bytes.length;
-    if (seen > hashed) hash(bytes);
+    if (seen > hashed) hash(bytes, done);
   });
   return { ok: true, value: { text: older ?? '', encoding: 'windows-1252', hash: hasher.digest() } };
 }

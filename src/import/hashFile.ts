@@ -30,5 +30,21 @@ export function hashFile(bytes: Uint8Array): string {
   return bytesToHex(sha256(bytes)).slice(0, DIGITS);
 }
 
+/** Bytes hashed in one task: some milliseconds' work. */
+const PIECE = 1 << 19;
+
+/**
+ * Fingerprint of a file or a long text, taken in pieces so that the page stays free.
+ *
+ * @param content a file, or a Blob of a text
+ * @returns 32 hexadecimal digits
+ */
+export async function hashBlob(content: Blob): Promise<string> {
+  const hasher = new FileHasher();
+  for (let from = 0; from < content.size; from += PIECE)
+    hasher.add(new Uint8Array(await content.slice(from, from + PIECE).arrayBuffer()));
+  return hasher.digest();
+}
+
 /** Fingerprint of pasted text: that of its UTF-8 bytes. */
 export const hashText = (text: string): string => hashFile(new TextEncoder().encode(text));

@@ -6,6 +6,8 @@ import type { View } from '../../workers/contract/envelope.ts';
 export interface Actions {
   /** A dropped or picked file; starts an arrival. Never throws: trouble becomes a notice, the work is kept. */
   readonly openFile: (file: File) => Promise<void>;
+  /** Several files of one export: put together in the order of time, overlaps reported. */
+  readonly openFiles: (files: readonly File[]) => Promise<void>;
   /** Pasted text: a CSV, or a session link from any origin, of which only the hash is used. */
   readonly openText: (text: string, name: string) => Promise<void>;
   readonly openExample: (name: string) => Promise<void>;
@@ -13,6 +15,8 @@ export interface Actions {
   readonly changeDialect: (settings: Partial<Dialect>) => Promise<void>;
   /** Takes the record from the arrival and fits the first three candidates (or those that a link brought). */
   readonly acceptArrival: () => void;
+  /** Stops reading: goes back to what was read last, or dismisses the file. */
+  readonly stopReading: () => void;
   readonly dismissArrival: () => void;
   readonly forgetRecord: () => void;
 

@@ -5,7 +5,7 @@ import type { View } from '../../workers/contract/envelope.ts';
 import type { Failure } from '../../workers/contract/failures.ts';
 import type { Fit } from '../../workers/contract/fit.ts';
 import type { Prediction } from '../../workers/contract/prediction.ts';
-import type { ReadAnswer, ReadRecord } from '../../workers/contract/reading.ts';
+import type { JoinedPart, JoinRequest, ReadAnswer, ReadRecord, WorkbookText } from '../../workers/contract/reading.ts';
 import type { ComparisonGroup } from '../../workers/contract/selection.ts';
 import type { Result } from '../../workers/contract/result.ts';
 import type { IntegratedIntervals, InvertedInterval } from '../../workers/contract/uncertainty.ts';
@@ -32,9 +32,17 @@ export interface Arrival {
   readonly text: string;
   /** Settings the person changed; the rest is detected. */
   readonly settings: Partial<Dialect>;
-  /** null while it is being read. */
+  /** The last answer, kept while other settings are tried; null before the first. */
   readonly answer: ReadAnswer | null;
+  readonly reading: boolean;
   readonly fraction: number;
+  /** Files it came from, kept to be decoded again another way; none for pasted text. */
+  readonly files: readonly File[];
+  /** Texts that `text` was joined of, and where each begins in it; none for a single one. */
+  readonly pieces: JoinRequest['files'];
+  readonly parts: readonly JoinedPart[];
+  /** Sheets of a workbook; none for text. */
+  readonly sheets: WorkbookText['sheets'];
 }
 
 /** Where a record's readings are. `wanted`: the session came from a link and the file has not been given yet. */

@@ -3,7 +3,14 @@ import type { FitRequest } from '../../workers/contract/candidate.ts';
 import type { DiagnoseRequest, Judgement } from '../../workers/contract/diagnostics.ts';
 import type { Fit } from '../../workers/contract/fit.ts';
 import type { Prediction, PredictRequest } from '../../workers/contract/prediction.ts';
-import type { ReadAnswer, ReadRequest } from '../../workers/contract/reading.ts';
+import type {
+  JoinedFiles,
+  JoinRequest,
+  ReadAnswer,
+  ReadRequest,
+  WorkbookRequest,
+  WorkbookText,
+} from '../../workers/contract/reading.ts';
 import type { Result } from '../../workers/contract/result.ts';
 import type { ComparisonGroup } from '../../workers/contract/selection.ts';
 import type {
@@ -12,7 +19,8 @@ import type {
   InversionRequest,
   InvertedInterval,
 } from '../../workers/contract/uncertainty.ts';
-import type { ModellingApi, ReadingApi } from '../../workers/contract/workerApis.ts';
+import type { ModellingApi, ReadingApi, WorkbookApi } from '../../workers/contract/workerApis.ts';
+import { WorkerHandle } from './workerHandle.ts';
 import { failureOf, WorkerPool } from './workerPool.ts';
 
 const MOST_WORKERS = 4;
@@ -30,7 +38,12 @@ export interface CoreClient {
     progress: (fraction: number) => void,
   ): Promise<Result<InvertedInterval>>;
   read(request: ReadRequest, progress: (fraction: number) => void): Promise<ReadAnswer>;
+  join(request: JoinRequest): Promise<Result<JoinedFiles>>;
+  /** Takes the bytes with it. */
+  workbook(request: WorkbookRequest): Promise<Result<WorkbookText>>;
   abort(key: string): void;
+  /** Ends whatever is being read, joined or unpacked. */
+  abortReading(): void;
   abortAll(): void;
   pending(): number;
 }
@@ -46,6 +59,23 @@ export function createCoreClient(): CoreClient {
     () => new Worker(new URL('../../workers/entry/reading.worker.ts', import.meta.url), { type: 'module' }),
     1,
   );
+  // A worker for each workbook: what unpacking took is given back when it ends.
+  let workbook: WorkerHandle<WorkbookApi> | null = null;
+  const readWorkbook = async (request: WorkbookRequest): Promise<Result<WorkbookText>> => {
+    workbook?.terminate();
+    const own = (workbook = new WorkerHandle<WorkbookApi>(
+      () => new Worker(new URL('../../workers/entry/workbook.worker.ts', import.meta.url), { type: 'module' }),
+    ));
+    try {
+      return await own.call(async (remote) => await remote.read(Comlink.transfer(request, [request.bytes])));
+    } finally {
+      own.terminate();
+    }
+  };
+  const abortReading = () => {
+    workbook?.terminate();
+    reading.abortAll();
+  };
   const safe = <T>(work: Promise<Result<T>>): Promise<Result<T>> =>
     work.catch((error: unknown) => ({ ok: false, failure: failureOf(error) }));
   return {
@@ -69,10 +99,13 @@ export function createCoreClient(): CoreClient {
       reading
         .run<ReadAnswer>('read', async (remote) => await remote.read(request, Comlink.proxy(progress)))
         .catch((error: unknown) => ({ sniffed: null, record: null, failure: failureOf(error) })),
+    join: (request) => safe(reading.run<Result<JoinedFiles>>('read', async (remote) => await remote.join(request))),
+    workbook: (request) => safe(readWorkbook(request)),
     abort: (key) => modelling.abort(key),
+    abortReading,
     abortAll: () => {
       modelling.abortAll();
-      reading.abortAll();
+      abortReading();
     },
     pending: () => modelling.pending + reading.pending,
   };

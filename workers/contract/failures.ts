@@ -69,6 +69,8 @@ export type ColumnReason = 'annihilated' | 'inGap' | 'collinear';
 /** What can be wrong with a file. `line` is counted from 1 in the file, `column` from 1. */
 export type ReadingFailure =
   | { readonly code: 'emptyFile' }
+  /** The browser could not get at the bytes: moved, removed or locked since it was picked. */
+  | { readonly code: 'fileUnreadable'; readonly reason: string }
   | { readonly code: 'binaryFile'; readonly kind: string }
   | { readonly code: 'fileTooLarge'; readonly bytes: number; readonly limit: number }
   | {

@@ -24,12 +24,13 @@ export function Masthead() {
           ref={input}
           className="unseen"
           type="file"
-          accept=".csv,.tsv,.txt,.dat,.json,text/*"
+          multiple
+          accept=".csv,.tsv,.txt,.dat,.prn,.asc,.log,.json,.xlsx,text/*"
           aria-label="Record file"
           tabIndex={-1}
           onChange={(event) => {
-            const [file] = event.target.files ?? [];
-            if (file !== undefined) void actions.openFile(file);
+            const files = [...(event.target.files ?? [])];
+            if (files.length > 0) void actions.openFiles(files);
             event.target.value = '';
           }}
         />

@@ -1,24 +1,29 @@
 import type { Dialect } from '../../../workers/contract/dialect.ts';
+import type { Failure } from '../../../workers/contract/failures.ts';
 import type { ReadAnswer, ReadRecord } from '../../../workers/contract/reading.ts';
-import { decodeFile } from '../../import/decodeFile.ts';
 import { hashText } from '../../import/hashFile.ts';
 import type { CoreClient } from '../../workerClient/clients.ts';
-import type { AppState, Arrival, RecordState } from '../appState.ts';
+import type { Arrival, RecordState } from '../appState.ts';
+import { filledRecord, replacedRecord } from './arrivedRecord.ts';
 import type { History } from './history.ts';
 import type { Jobs } from './jobs.ts';
-import { startingCandidates } from '../startingCandidates.ts';
+import { joinPieces, loadFiles, type Loaded } from './loadFiles.ts';
 import type { Store } from '../store.ts';
-import { activeRecord, freshId, trouble, withNotice, withRecord } from '../updates.ts';
+import { activeRecord, trouble, withNotice } from '../updates.ts';
 
 export interface Arrivals {
-  readonly openFile: (file: File) => Promise<void>;
+  readonly openFiles: (files: readonly File[]) => Promise<void>;
   /** Text of a record, pasted or fetched. */
   readonly openRecordText: (text: string, name: string, take?: 'take' | 'look', example?: boolean) => Promise<void>;
   readonly changeDialect: (settings: Partial<Dialect>) => Promise<void>;
   readonly acceptArrival: () => void;
+  readonly stopReading: () => void;
   readonly dismissArrival: () => void;
   readonly forgetRecord: () => void;
 }
+
+/** Share of the work of a large file that decoding it takes; splitting it into rows is the rest. */
+const DECODING = 0.3;
 
 export function createArrivals(
   store: Store,
@@ -30,23 +35,48 @@ export function createArrivals(
 ): Arrivals {
   /** Number of the newest reading; late answers of older ones are dropped. */
   let newest = 0;
+  /** The arrival as it was last read to the end: where stopping goes back to. */
+  let settled: Arrival | null = null;
 
-  const read = async (arrival: Arrival): Promise<ReadAnswer | null> => {
+  const show = (arrival: Arrival | null) => store.set((state) => ({ ...state, arrival }));
+  const progressOf = (own: number) => (fraction: number) =>
+    store.set((state) =>
+      own === newest && state.arrival !== null ? { ...state, arrival: { ...state.arrival, fraction } } : state,
+    );
+
+  /** Goes back to what was read last and says why. */
+  const giveUp = (failure: Failure, name: string) => {
+    show(settled);
+    if (failure.code !== 'cancelled') store.set((state) => withNotice(state, trouble(failure, name)));
+  };
+
+  const read = async (arrival: Arrival, from = 0): Promise<ReadAnswer | null> => {
     newest += 1;
     const own = newest;
-    store.set((state) => ({ ...state, arrival: { ...arrival, answer: null, fraction: 0 } }));
-    const answer = await client.read(
-      { text: arrival.text, fileName: arrival.fileName, settings: arrival.settings },
-      (fraction) =>
-        store.set((state) =>
-          own === newest && state.arrival !== null ? { ...state, arrival: { ...state.arrival, fraction } } : state,
-        ),
-    );
+    const { text, fileName, settings, parts } = arrival;
+    show({ ...arrival, reading: true, fraction: from });
+    const progress = progressOf(own);
+    const answer = await client.read({ text, fileName, settings, parts }, (part) => progress(from + (1 - from) * part));
     if (own !== newest) return null;
-    store.set((state) =>
-      state.arrival === null ? state : { ...state, arrival: { ...state.arrival, answer, fraction: 1 } },
-    );
+    settled = { ...arrival, answer, reading: false, fraction: 1 };
+    show(settled);
     return answer;
+  };
+
+  /** Decodes, unpacks and joins; null where it failed, was stopped, or something newer has begun. */
+  const load = async (arrival: Arrival): Promise<Loaded | null> => {
+    newest += 1;
+    const own = newest;
+    show({ ...arrival, reading: true, fraction: 0 });
+    const progress = progressOf(own);
+    const loaded = await loadFiles(client, arrival.files, arrival.settings, (part) => {
+      progress(DECODING * part);
+      return own === newest;
+    });
+    if (own !== newest) return null;
+    if (loaded.ok) return loaded.value;
+    giveUp(loaded.failure, arrival.fileName);
+    return null;
   };
 
   const wanted = (): RecordState | null => {
@@ -55,9 +85,10 @@ export function createArrivals(
   };
 
   /** A file for a session that came by link is read the link's way. */
-  const start = (fileName: string, fileHash: string, text: string): Arrival => {
+  const start = (fileName: string, fileHash: string, text: string, files: readonly File[] = []): Arrival => {
     const settings = wanted()?.dialect ?? {};
-    return { fileName, fileHash, text, settings, answer: null, fraction: 0 };
+    const empty = { answer: null, reading: true, fraction: 0, pieces: [], parts: [], sheets: [] };
+    return { fileName, fileHash, text, settings, files, ...empty };
   };
 
   const take = (arrival: Arrival, record: ReadRecord, example: boolean) => {
@@ -66,8 +97,11 @@ export function createArrivals(
     // What the page opens with is where undo ends.
     if (waiting === null && !store.get().opening) history.remember();
     newest += 1;
+    settled = null;
     store.set((state) => ({
-      ...(same ? filled(state, waiting, arrival, record, example) : replaced(state, arrival, record, example)),
+      ...(same
+        ? filledRecord(state, waiting, arrival, record, example)
+        : replacedRecord(state, arrival, record, example)),
       arrival: null,
       prediction: null,
     }));
@@ -80,20 +114,32 @@ export function createArrivals(
     jobs.fitWaiting();
   };
 
+  const dismissArrival = () => {
+    newest += 1;
+    settled = null;
+    client.abortReading();
+    show(null);
+  };
+
+  /** Loads the files of an arrival again and reads them. */
+  const reload = async (arrival: Arrival) => {
+    const loaded = await load(arrival);
+    if (loaded !== null) await read({ ...arrival, ...loaded }, DECODING);
+  };
+
   return {
-    openFile: async (file) => {
-      const decoded = await decodeFile(file);
-      if (!decoded.ok) {
-        store.set((state) => withNotice(state, trouble(decoded.failure, file.name)));
-        return;
-      }
-      if (await openSessionText(decoded.value.text)) return;
-      const arrival = start(file.name, decoded.value.hash, decoded.value.text);
+    openFiles: async (files) => {
+      const [first] = files;
+      if (first === undefined) return;
+      const name = files.length === 1 ? first.name : `${first.name} and ${files.length - 1} more`;
       const matches = wanted();
-      const answer = await read({
-        ...arrival,
-        settings: { ...arrival.settings, ...(matches === null ? { encoding: decoded.value.encoding } : {}) },
-      });
+      settled = store.get().arrival?.reading === true ? settled : store.get().arrival;
+      const arrival = start(name, '', '', files);
+      const loaded = await load(arrival);
+      if (loaded === null) return;
+      if (files.length === 1 && loaded.sheets.length === 0 && (await openSessionText(loaded.text))) return;
+      const settings = matches === null ? loaded.settings : { ...loaded.settings, ...arrival.settings };
+      const answer = await read({ ...arrival, ...loaded, settings }, DECODING);
       const now = store.get().arrival;
       if (matches !== null && now !== null && answer?.record?.series.hash === matches.seriesHash)
         take(now, answer.record, false);
@@ -106,60 +152,41 @@ export function createArrivals(
     },
     changeDialect: async (settings) => {
       const { arrival } = store.get();
-      if (arrival !== null) await read({ ...arrival, settings: { ...arrival.settings, ...settings } });
+      if (arrival === null) return;
+      // Another sheet is another table: nothing that was settled about the last one holds.
+      if (settings.sheet !== undefined) {
+        await reload({ ...arrival, settings: { sheet: settings.sheet } });
+        return;
+      }
+      const next = { ...arrival, settings: { ...arrival.settings, ...settings } };
+      if (settings.encoding !== undefined && arrival.files.length > 0) {
+        await reload(next);
+        return;
+      }
+      if (arrival.pieces.length < 2) {
+        await read(next);
+        return;
+      }
+      const joined = await joinPieces(client, arrival.pieces, next.settings);
+      if (joined.ok) await read({ ...next, ...joined.value });
+      else giveUp(joined.failure, arrival.fileName);
     },
     acceptArrival: () => {
       const { arrival } = store.get();
-      if (arrival?.answer?.record) take(arrival, arrival.answer.record, false);
+      if (arrival?.answer?.record && !arrival.reading) take(arrival, arrival.answer.record, false);
     },
-    dismissArrival: () => {
+    stopReading: () => {
       newest += 1;
-      store.set((state) => ({ ...state, arrival: null }));
+      client.abortReading();
+      show(settled);
     },
+    dismissArrival,
     forgetRecord: () => {
       history.remember();
       jobs.cancel();
+      newest += 1;
+      settled = null;
       store.set((state) => ({ ...state, records: [], active: null, prediction: null, arrival: null }));
     },
-  };
-}
-
-/** The wanted record of a link with its readings: candidates as the link has them. */
-function filled(
-  state: AppState,
-  wanted: RecordState,
-  arrival: Arrival,
-  record: ReadRecord,
-  example: boolean,
-): AppState {
-  return withRecord(state, wanted.id, (one) => ({
-    ...one,
-    source: { kind: 'loaded', fileName: arrival.fileName, text: arrival.text, record, example },
-  }));
-}
-
-/** A new record in place of the old; candidates of a session that wanted another file go along. */
-function replaced(state: AppState, arrival: Arrival, record: ReadRecord, example: boolean): AppState {
-  const old = activeRecord(state);
-  const { values, axis, hash } = record.series;
-  const kept = old?.source.kind === 'wanted' ? old.rows.map(({ candidate }) => candidate) : null;
-  const candidates = kept ?? startingCandidates(axis, values.length);
-  const id = freshId('r');
-  const next: RecordState = {
-    id,
-    fileHash: arrival.fileHash,
-    seriesHash: hash,
-    dialect: record.dialect,
-    repairs: [],
-    window: { from: 0, to: values.length },
-    holdOut: null,
-    rows: candidates.map((candidate) => ({ id: freshId('c'), candidate, progress: { kind: 'waiting' }, grey: null })),
-    source: { kind: 'loaded', fileName: arrival.fileName, text: arrival.text, record, example },
-  };
-  return {
-    ...state,
-    records: [next],
-    active: id,
-    view: { ...state.view, chosen: kept === null ? null : state.view.chosen },
   };
 }

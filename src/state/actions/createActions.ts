@@ -30,13 +30,15 @@ export function createActions(
   };
 
   const actions: Actions = {
-    openFile: arrivals.openFile,
+    openFile: (file) => arrivals.openFiles([file]),
+    openFiles: arrivals.openFiles,
     openText: async (text, name) => {
       if (!(await links.openSessionText(text))) await arrivals.openRecordText(text, name);
     },
     openExample,
     changeDialect: arrivals.changeDialect,
     acceptArrival: arrivals.acceptArrival,
+    stopReading: arrivals.stopReading,
     dismissArrival: arrivals.dismissArrival,
     forgetRecord: arrivals.forgetRecord,
     ...createCandidateActions(store, jobs, history),

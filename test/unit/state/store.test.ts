@@ -8,7 +8,9 @@ import { activeRows, progressCounts, sortedRows } from '../../../src/state/selec
 import { plainCandidate, plausibleSeason, startingCandidates } from '../../../src/state/startingCandidates.ts';
 import { createStore, type Store } from '../../../src/state/store.ts';
 import { modellingApi } from '../../../workers/entry/modellingApi.ts';
+import { joinFiles } from '../../../workers/reading/files/joinFiles.ts';
 import { readRecord } from '../../../workers/reading/readRecord.ts';
+import { readWorkbook } from '../../../workers/reading/workbook/readWorkbook.ts';
 import type { Fit } from '../../../workers/contract/fit.ts';
 import type { Result } from '../../../workers/contract/result.ts';
 import { publishedSeries } from '../../helpers/publishedSeries.ts';
@@ -33,7 +35,10 @@ function directClient(hold: { fits: (() => void)[] | null }): CoreClient {
     intervals: (_key, request) => Promise.resolve(modellingApi.intervals(request)),
     invert: (_key, request, progress) => Promise.resolve(modellingApi.invert(request, progress)),
     read: (request) => Promise.resolve(readRecord(request)),
+    join: (request) => Promise.resolve(joinFiles(request)),
+    workbook: (request) => readWorkbook(request),
     abort: () => undefined,
+    abortReading: () => undefined,
     abortAll: () => undefined,
     pending: () => 0,
   };
