@@ -21,7 +21,7 @@ function settingOf(about: Question['about'], option: string): Partial<Dialect> {
     case 'valueColumn':
       return { valueColumn: Number(option) };
     case 'timeColumn':
-      return { timeColumn: Number(option) };
+      return { timeColumn: Number(option), stampColumns: null };
     case 'tag':
       return { tag: option };
   }
