@@ -21,6 +21,7 @@ export type PublishedName =
   | 'lew'
   | 'lottery'
   | 'luteinisingHormone'
+  | 'lynx'
   | 'mavro'
   | 'michelson'
   | 'newHaven'

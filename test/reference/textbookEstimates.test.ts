@@ -199,6 +199,18 @@ describe('frozen values of further published series', () => {
     near(logLikelihood, -524.871, 5e-4);
   });
 
+  it('log10 lynx, AR(2): least squares 1.41, −0.77 (Moran 1953, from memory); exact likelihood by an independent dense computation', () => {
+    const logs = publishedSeries('lynx').map(Math.log10);
+    const exact = fitted(logs, { p: 2 }, { level: 'mean' });
+    near(exact.parameters.ar[0], 1.37761, 6e-6);
+    near(exact.parameters.ar[1], -0.73988, 6e-6);
+    near(exact.parameters.mean, 2.90382, 6e-6);
+    near(exact.parameters.innovationVariance, 0.05107, 6e-6);
+    const leastSquares = fitted(logs, { p: 2 }, { level: 'mean', estimator: 'leastSquares' });
+    near(leastSquares.parameters.ar[0], 1.41, 0.03);
+    near(leastSquares.parameters.ar[1], -0.77, 0.03);
+  });
+
   it('New Haven temperature, (0,1,1)', () => {
     const { parameters, logLikelihood } = fitted(publishedSeries('newHaven'), { d: 1, q: 1 });
     near(parameters.ma[0], -0.79827, 5e-6);
