@@ -5,13 +5,10 @@ import type { Result } from '../contract/result.ts';
 import { differenceRecord } from '../series/differenceRecord.ts';
 import { conditionalLikelihood, type Conditional } from './engine/conditionalLikelihood.ts';
 import type { Engine } from './engine/engine.ts';
-import { FastEngine } from './engine/fastEngine.ts';
-import { FastGradient } from './engine/fastGradient.ts';
+import { fastRoutes, type FastRoute } from './engine/fastRoute.ts';
 import { GapFilter } from './engine/gapFilter.ts';
 import { numericGradient } from './engine/numericGradient.ts';
 import { ProfileGls } from './engine/profileGls.ts';
-import { SeasonalEngine } from './engine/seasonalEngine.ts';
-import { SeasonalGradient } from './engine/seasonalGradient.ts';
 import { scaledBeta } from './scaledBeta.ts';
 import { columnsForGaps, withoutGaps } from './engine/columnsForGaps.ts';
 import { prepareRecord, type PreparedRecord, type PrepareRequest } from './prepareRecord.ts';
@@ -52,7 +49,7 @@ export interface PreparedLikelihood {
  *
  * ln L is that of the record with a flat prior on its d + sD starting values, all constants kept, in the units of the
  * readings (the transform's Jacobian summed over the readings used). The engine is chosen by the record and the cost: without gaps, or
- * with few of them beside long lags, the fast one, by phases of the season where that is long; else the filter, with differencing with its diffuse start. Where rounding would eat
+ * with gaps whose pulses do not all meet, the fast one, by phases of the season where that is long; else the filter, with differencing with its diffuse start. Where rounding would eat
  * the fast one's answer the filter takes over.
  *
  * @param request values (gaps as NaN), a checked candidate, window, covariates by name, λ
@@ -69,14 +66,20 @@ export function prepareLikelihood(request: PrepareRequest): Result<PreparedLikel
   const { record, columns, differencing, scale, readingsUsed } = prepared;
   const difference = (one: Float64Array) => (differencing.length > 1 ? differenceRecord(one, differencing) : one);
   const differenced = [record, ...columns].map(difference);
-  const missing = columnsForGaps(record, p, q, differencing.length - 1, columns.length);
-  const filled = missing === null ? null : [withoutGaps(record), ...missing, ...columns].map(difference);
-  const length = filled?.[0]!.length ?? 0;
-  const seasonal =
-    filled !== null && SeasonalEngine.fits(order, length) ? new SeasonalEngine(filled, order, missing!.length) : null;
-  const gls = filled === null ? null : new ProfileGls(filled.length, missing!.length);
-  // Beside the seasonal engine it is seldom wanted.
-  const fast = filled === null ? null : onceMade(() => new FastEngine(filled, p, q, missing!.length));
+  const missing = columnsForGaps(record, differencing.length - 1, columns.length);
+  const routes =
+    missing === null
+      ? []
+      : fastRoutes(
+          {
+            series: [withoutGaps(record), ...missing.columns, ...columns].map(difference),
+            flat: missing.columns.length,
+            places: missing.places,
+            differencing,
+            readings: readingsUsed,
+          },
+          order,
+        );
   let filter: GapFilter | null = null;
   let filterGls: ProfileGls | null = null;
   const slow = (): [GapFilter, ProfileGls] => {
@@ -88,22 +91,23 @@ export function prepareLikelihood(request: PrepareRequest): Result<PreparedLikel
     return [filter, filterGls];
   };
   const constant = readingsUsed * Math.log(scale) - prepared.logJacobian;
-  let current: Pick<Engine, 'kind' | 'logDeterminant'>;
+  /** Where the likelihood was evaluated last. */
+  let current: Pick<Engine, 'logDeterminant'>;
+  let route: FastRoute | null = null;
 
   /** Evaluates and profiles; null outside the region. `whole`: a gradient is to follow. */
   const at = (factors: Factors, whole = false): ProfileGls | null => {
-    if (seasonal !== null && gls !== null && seasonal.evaluate(factors, s) && gls.solve(seasonal.cross)) {
-      current = seasonal;
-      return gls;
+    for (const make of routes) {
+      route = make();
+      current = route;
+      const gls = route.evaluate(factors, whole);
+      if (gls !== null) return gls;
     }
+    route = null;
     const { ar, ma } = expandPolynomials(factors, s);
-    if (fast !== null && gls !== null && fast().evaluate(ar, ma, whole) && gls.solve(fast().cross)) {
-      current = fast();
-      return gls;
-    }
-    const [engine, others] = slow();
+    const [engine, gls] = slow();
     current = engine;
-    return engine.evaluate(ar, ma) && others.solve(engine.cross) ? others : null;
+    return engine.evaluate(ar, ma) && gls.solve(engine.cross) ? gls : null;
   };
   const height = (gls: ProfileGls | null): number => {
     if (gls === null) return -Infinity;
@@ -111,13 +115,11 @@ export function prepareLikelihood(request: PrepareRequest): Result<PreparedLikel
     const spread = Math.log((2 * Math.PI * rss) / readingsUsed) + 1;
     return -0.5 * (readingsUsed * spread + current.logDeterminant + flatLogDeterminant) - constant;
   };
-  const gradientOfFast = fast && onceMade(() => new FastGradient(fast(), order, readingsUsed));
-  const gradientOfSeasonal = seasonal && onceMade(() => new SeasonalGradient(seasonal, order, readingsUsed));
   let lastBeta = new Float64Array(columns.length);
 
   const value: PreparedLikelihood = {
     readingsUsed,
-    engine: fast ? 'fast' : slow()[0].kind,
+    engine: routes.length > 0 ? 'fast' : slow()[0].kind,
     columnNames: prepared.columnNames,
     scale,
     centre: prepared.centre,
@@ -132,8 +134,7 @@ export function prepareLikelihood(request: PrepareRequest): Result<PreparedLikel
       const value = height(gls);
       if (gls !== null) lastBeta = ownBeta(prepared, gls);
       if (gls === null) gradient.fill(0);
-      else if (gradientOfSeasonal !== null && current === seasonal) gradientOfSeasonal().write(factors, gls, gradient);
-      else if (gradientOfFast !== null && current.kind === 'fast') gradientOfFast().write(factors, gls, gradient);
+      else if (route !== null) route.slopes(factors, gls, gradient);
       else numericGradient(factors, (near) => height(at(near)), value, readingsUsed, gradient);
       return value;
     },
@@ -150,12 +151,6 @@ export function prepareLikelihood(request: PrepareRequest): Result<PreparedLikel
     },
   };
   return { ok: true, value };
-}
-
-/** What a call makes, made at the first one. */
-function onceMade<T>(make: () => T): () => T {
-  let made: { readonly value: T } | null = null;
-  return () => (made ??= { value: make() }).value;
 }
 
 /** Σ over the GLS sum of squares and the distance of `beta` from its optimum: no cancellation near the optimum. */

@@ -108,14 +108,14 @@ describe.each(cases.filter(([name]) => !name.includes('circle')))('%s', (_name, 
   });
 });
 
-test('few gaps beside long lags take columns, many gaps beside short lags the filter', () => {
+test('gaps among the starting values take columns, the others are places in the differenced record', () => {
   const long = new Float64Array(2000);
-  long[100] = NaN;
-  long[900] = NaN;
-  expect(columnsForGaps(long, 25, 25, 24, 0)).toHaveLength(2);
-  const many = Float64Array.from({ length: 2000 }, (_, t) => (t % 5 === 0 ? NaN : t));
-  expect(columnsForGaps(many, 1, 1, 0, 1)).toBeNull();
-  expect(columnsForGaps(new Float64Array(10), 1, 1, 0, 1)).toEqual([]);
+  for (const gap of [10, 100, 900]) long[gap] = NaN;
+  const found = columnsForGaps(long, 24, 0)!;
+  expect(found.columns.map((column) => column.indexOf(1))).toEqual([10]);
+  expect([...found.places]).toEqual([76, 876]);
+  expect(columnsForGaps(new Float64Array(10), 1, 1)!.columns).toEqual([]);
+  expect(columnsForGaps(new Float64Array(300).fill(NaN, 1, 100), 150, 0)).toBeNull();
 });
 
 test.each([

@@ -1,5 +1,11 @@
-import { sparsePolynomial, type SparsePolynomial } from '../../model/expandPolynomials.ts';
+import {
+  expandPolynomials,
+  sparsePolynomial,
+  type Factors,
+  type SparsePolynomial,
+} from '../../model/expandPolynomials.ts';
 import type { Engine } from './engine.ts';
+import type { PulseHost } from './gapPulses.ts';
 import { shortRecursion } from './shortRecursion.ts';
 import { StartEffect } from './startEffect.ts';
 import { adjointRecursion, steadyRecursion } from './steadyRecursion.ts';
@@ -14,7 +20,7 @@ const CANCELLATION = 1e5;
  * The correction needs the innovations only up to the step where the past has no effect to rounding, which the impulse
  * response of 1/θ(B) tells; with an MA root on the circle that is the whole record.
  */
-export class FastEngine implements Engine {
+export class FastEngine implements Engine, PulseHost {
   readonly kind = 'fast';
   readonly count: number;
   readonly cross: Float64Array;
@@ -73,14 +79,12 @@ export class FastEngine implements Engine {
   /** @param whole whether all innovations must be written, as the gradient needs them */
   evaluate(ar: Float64Array, ma: Float64Array, whole = true): boolean {
     const { start, count, observed: n } = this;
-    this.sparseAr = sparsePolynomial(ar);
-    this.sparseMa = sparsePolynomial(ma);
-    if (!start.prepare(ar, ma, this.sparseMa)) return false;
+    if (!this.prepare(ar, ma)) return false;
     this.logDeterminant = start.logDeterminant;
     this.kept = whole || this.varied ? n : this.settling();
     for (let i = 0; i < count; i++) {
       this.run(i);
-      this.correct(i, this.innovations[i]!);
+      this.correct(this.innovations[i]!, this.whitened[i]!, this.shrunk[i]!);
     }
     let sane = true;
     for (let i = 0; i < count; i++) {
@@ -94,6 +98,44 @@ export class FastEngine implements Engine {
       }
     }
     return sane;
+  }
+
+  get pastReach(): number {
+    return this.start.m === 0 ? 0 : this.start.reach + this.start.m;
+  }
+
+  settle(factors: Factors, s: number): boolean {
+    const { ar, ma } = expandPolynomials(factors, s);
+    return this.prepare(ar, ma);
+  }
+
+  /** y = L⁻¹H′e⁰, then v = R⁻¹y. */
+  past(e: Float64Array): Float64Array {
+    const { m } = this.start;
+    const both = new Float64Array(2 * m);
+    this.correct(e, both.subarray(0, m), both.subarray(m));
+    return both;
+  }
+
+  pastOf(i: number): Float64Array {
+    return Float64Array.of(...this.whitened[i]!, ...this.shrunk[i]!);
+  }
+
+  pastProduct(a: Float64Array, b: Float64Array): number {
+    const { m } = this.start;
+    return dot(a, b, 0, m) - dot(a, b, m, 2 * m);
+  }
+
+  /** Innovations of padded values started from nothing. */
+  filter(x: Float64Array, e: Float64Array): void {
+    const { pad, observed: n, sparseAr, sparseMa, sums } = this;
+    if (!shortRecursion(x, e, pad, n, sparseAr, sparseMa, n, sums)) steadyRecursion(x, e, pad, n, sparseAr, sparseMa);
+  }
+
+  private prepare(ar: Float64Array, ma: Float64Array): boolean {
+    this.sparseAr = sparsePolynomial(ar);
+    this.sparseMa = sparsePolynomial(ma);
+    return this.start.prepare(ar, ma, this.sparseMa);
   }
 
   /** Innovations of one series started from nothing; those of a constant no longer change once the past has no effect. */
@@ -135,15 +177,13 @@ export class FastEngine implements Engine {
     return head + last * (Number.isNaN(this.rests[b]!) ? total(y, pad + steps, pad + n) : this.rests[b]!);
   }
 
-  private correct(i: number, e: Float64Array): void {
+  private correct(e: Float64Array, y: Float64Array, v: Float64Array): void {
     const { start, pad, adjoint, observed: n } = this;
     if (start.m === 0) return;
     const steps = Math.min(n, start.reach + start.m);
     adjointRecursion(e, adjoint, pad, steps, this.sparseMa);
-    const y = this.whitened[i]!;
     for (let k = 0; k < start.m; k++) y[k] = adjoint[pad + k]!;
     start.whiten(y);
-    const v = this.shrunk[i]!;
     v.set(y);
     start.shrink(v);
   }

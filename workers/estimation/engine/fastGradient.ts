@@ -2,6 +2,7 @@ import type { Order } from '../../contract/candidate.ts';
 import { accumulate, lagDot } from './adjointSums.ts';
 import { expandPolynomials, type Factors } from '../../model/expandPolynomials.ts';
 import type { FastEngine } from './fastEngine.ts';
+import type { GapPulses } from './gapPulses.ts';
 import { factorStep } from './numericGradient.ts';
 import type { ProfileGls } from './profileGls.ts';
 import { shortAdjoint } from './shortAdjoint.ts';
@@ -40,6 +41,7 @@ export class FastGradient {
     private readonly engine: FastEngine,
     private readonly order: Order,
     private readonly readings: number,
+    private readonly pulses: GapPulses | null = null,
   ) {
     const { observed: n, pad } = engine;
     const { p, q, P, Q, s } = order;
@@ -83,14 +85,14 @@ export class FastGradient {
     chainSeasonal(factors.ar, P, s, -1, this.byAr, gradient, p + q);
     chainSeasonal(factors.ma, Q, s, 1, this.byMa, gradient, p + q + P);
     if (start.m > 0) this.addCovariance(factors, gradient);
+    this.pulses?.addSlopes(factors, gradient);
   }
 
   /** Adds −½·scale·d(x′V⁻¹x) for a combination x of the series, lag by lag, and its part of the start. */
   private probe(factors: Factors, weights: Float64Array, scale: number): void {
     const { engine, residual, shocks, adjoint, past, byAr, byMa, sums } = this;
     const { start, pad, observed: n, sparseMa } = engine;
-    this.combine(weights);
-    const c = this.addPast(weights);
+    const c = this.addPast(this.combine(weights));
     if (byAr.length <= 3 && byMa.length <= 3 && pad > 0) {
       shortAdjoint(residual, shocks, pad, n, sparseMa, sums);
       for (let lag = 1; lag < byAr.length; lag++) byAr[lag]! += scale * sums[lag - 1]!;
@@ -104,30 +106,34 @@ export class FastGradient {
     for (let i = 0; i < m; i++) for (let k = 0; k < m; k++) past[i * m + k]! += scale * c[i]! * c[k]!;
   }
 
-  /** x and its e⁰. */
-  private combine(weights: Float64Array): void {
-    const { engine, residual, shocks } = this;
+  /** x and its e⁰; returns its v. */
+  private combine(weights: Float64Array): Float64Array {
+    const { engine, residual, shocks, pulses } = this;
+    const { m } = engine.start;
+    const v = new Float64Array(m);
     let first = true;
     weights.forEach((value, i) => {
       if (value === 0) return;
       accumulate(residual, engine.series[i]!, value, first);
-      accumulate(shocks, engine.innovations[i]!, value, first);
+      if (pulses === null) accumulate(shocks, engine.innovations[i]!, value, first);
+      accumulate(v, engine.shrunk[i]!, value);
       first = false;
     });
-    if (!first) return;
-    residual.fill(0);
-    shocks.fill(0);
+    if (first) {
+      residual.fill(0);
+      shocks.fill(0);
+    }
+    if (pulses === null) return v;
+    pulses.complete(weights, residual);
+    engine.filter(residual, shocks);
+    return engine.past(shocks).subarray(m);
   }
 
-  /** Adds H ĝ to the innovations and returns c over the first m places, c = L M⁻¹ y. */
-  private addPast(weights: Float64Array): Float64Array {
+  /** Adds H ĝ to the innovations and returns c over the first m places, c = L M⁻¹ y = L R′⁻¹ v. */
+  private addPast(v: Float64Array): Float64Array {
     const { engine, shocks } = this;
     const { start, pad } = engine;
     const { m, gram, mixed, covariance, impulse } = start;
-    const v = new Float64Array(m);
-    weights.forEach((value, i) => {
-      if (value !== 0) engine.shrunk[i]!.forEach((one, k) => (v[k]! += value * one));
-    });
     backward(mixed, m, v);
     const c = new Float64Array(m);
     for (let i = 0; i < m; i++) for (let k = 0; k <= i; k++) c[i]! += gram[i * m + k]! * v[k]!;

@@ -1,6 +1,7 @@
 import type { Order } from '../../contract/candidate.ts';
 import { sparsePolynomial, type Factors, type SparsePolynomial } from '../../model/expandPolynomials.ts';
 import { dot, padded } from './fastEngine.ts';
+import type { PulseHost } from './gapPulses.ts';
 import { SeasonalStart } from './seasonalStart.ts';
 import { shortRecursion } from './shortRecursion.ts';
 import { steadyRecursion } from './steadyRecursion.ts';
@@ -22,7 +23,7 @@ export interface SparseFactors {
  * The fast engine of multiplicative seasonal models, for a record without gaps: the regular recursion, then the seasonal one, and a
  * correction for the unknown past whose cost does not grow with the season (see `SeasonalStart`).
  */
-export class SeasonalEngine {
+export class SeasonalEngine implements PulseHost {
   readonly kind = 'fast';
   readonly count: number;
   readonly cross: Float64Array;
@@ -36,7 +37,7 @@ export class SeasonalEngine {
   readonly reduced: readonly Float64Array[];
   sparse: SparseFactors = { ar: NONE, ma: NONE, seasonalAr: NONE, seasonalMa: NONE };
   private readonly between: Float64Array;
-  private readonly innovations: readonly Float64Array[];
+  readonly innovations: readonly Float64Array[];
   private readonly byResponse: Float64Array;
 
   /** Whether a record of n values under this order is for this engine. */
@@ -69,17 +70,12 @@ export class SeasonalEngine {
   /** False where the AR part is not stationary, where rounding has eaten the answer, or where another engine must do. */
   evaluate(factors: Factors, s: number): boolean {
     const { start, count, pad, observed: n, innovations } = this;
-    if (!start.prepare(factors)) return false;
+    if (!this.settle(factors, s)) return false;
     this.logDeterminant = start.logDeterminant;
-    this.sparse = sparseFactors(factors, s);
     for (let i = 0; i < count; i++) {
       const e = innovations[i]!;
-      const u = this.sparse.seasonalAr.lags.length > 0 ? this.between : e;
-      regularRecursion(this.series[i]!, u, pad, n, this.sparse);
-      steadyRecursion(u, e, pad, n, this.sparse.seasonalAr, this.sparse.seasonalMa);
-      start.response.fold(e, pad, this.byPhase[i]!);
-      start.correlate(e, pad, this.byResponse);
-      start.reduce(this.byPhase[i]!, this.byResponse, this.reduced[i]!);
+      this.filter(this.series[i]!, e);
+      this.look(e, this.byPhase[i]!, this.reduced[i]!);
     }
     let sane = true;
     for (let i = 0; i < count; i++) {
@@ -93,6 +89,50 @@ export class SeasonalEngine {
       }
     }
     return sane;
+  }
+
+  get pastReach(): number {
+    return this.start.response.furthest;
+  }
+
+  settle(factors: Factors, s: number): boolean {
+    this.sparse = sparseFactors(factors, s);
+    return this.start.prepare(factors);
+  }
+
+  /** D′e⁰, then Q′B₀⁻¹e⁰. */
+  past(e: Float64Array): Float64Array {
+    const { size, g } = this.start;
+    const both = new Float64Array(size + 2 * g);
+    this.look(e, both.subarray(0, size), both.subarray(size));
+    return both;
+  }
+
+  pastOf(i: number): Float64Array {
+    const both = new Float64Array(this.start.size + 2 * this.start.g);
+    both.set(this.byPhase[i]!);
+    both.set(this.reduced[i]!, this.start.size);
+    return both;
+  }
+
+  pastProduct(a: Float64Array, b: Float64Array): number {
+    const { size } = this.start;
+    return this.start.weighted(a, b) + this.bend(a.subarray(size), b.subarray(size));
+  }
+
+  /** Innovations of padded values started from nothing. */
+  filter(x: Float64Array, e: Float64Array): void {
+    const { pad, observed: n, sparse } = this;
+    const u = sparse.seasonalAr.lags.length > 0 ? this.between : e;
+    regularRecursion(x, u, pad, n, sparse);
+    steadyRecursion(u, e, pad, n, sparse.seasonalAr, sparse.seasonalMa);
+  }
+
+  private look(e: Float64Array, byPhase: Float64Array, reduced: Float64Array): void {
+    const { start, pad } = this;
+    start.response.fold(e, pad, byPhase);
+    start.correlate(e, pad, this.byResponse);
+    start.reduce(byPhase, this.byResponse, reduced);
   }
 
   /** a′(J⁻¹ + Q′B₀⁻¹Q)⁻¹b. */

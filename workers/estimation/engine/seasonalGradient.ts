@@ -1,6 +1,7 @@
 import type { Order } from '../../contract/candidate.ts';
 import type { Factors } from '../../model/expandPolynomials.ts';
 import { accumulate, addResponse, lagDot } from './adjointSums.ts';
+import type { GapPulses } from './gapPulses.ts';
 import { factorStep } from './numericGradient.ts';
 import type { ProfileGls } from './profileGls.ts';
 import { regularRecursion, type SeasonalEngine } from './seasonalEngine.ts';
@@ -31,6 +32,7 @@ export class SeasonalGradient {
     private readonly engine: SeasonalEngine,
     private readonly order: Order,
     private readonly readings: number,
+    private readonly pulses: GapPulses | null = null,
   ) {
     const { observed: n, pad, start } = engine;
     const { p, q, P, Q, s } = order;
@@ -65,6 +67,7 @@ export class SeasonalGradient {
       this.probe(weights, 1, gradient);
     }
     this.addStart(factors, gradient);
+    this.pulses?.addSlopes(factors, gradient);
   }
 
   /** Adds −½·scale·d(x′V⁻¹x) for a combination x of the series, but for its part through Π, which is put by. */
@@ -111,7 +114,11 @@ export class SeasonalGradient {
       accumulate(byPhase, engine.byPhase[i]!, value);
       accumulate(reduced, engine.reduced[i]!, value);
     });
-    return start.pull(byPhase, reduced);
+    if (this.pulses === null) return start.pull(byPhase, reduced);
+    this.pulses.complete(weights, residual);
+    engine.filter(residual, this.shocks);
+    const past = engine.past(this.shocks);
+    return start.pull(past.subarray(0, start.size), past.subarray(start.size));
   }
 
   private remember(alpha: Float64Array, gamma: Float64Array, scale: number): void {

@@ -29,6 +29,11 @@ export class SeasonalResponse {
     this.seasonal = new Float64Array(Math.ceil(n / s) + 1);
   }
 
+  /** Steps from the start after which the past has no effect. */
+  get furthest(): number {
+    return Math.max(this.reach, (this.seasons + this.M) * this.s) + this.g;
+  }
+
   set(factors: Factors): void {
     this.respondSeasonally(factors.seasonalMa);
     if (this.g > 0) this.respond(factors);
