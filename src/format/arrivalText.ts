@@ -41,7 +41,7 @@ const share = (fraction: number): string => `${formatNumber(100 * fraction, 2)} 
 
 /** How the stamps follow one another, before any grid. */
 export function timingSentence(
-  { kind, intervals, count, regular, jitter, offGrid, repeats, reversals }: Timing,
+  { kind, intervals, count, regular, jitter, offGrid, repeats, crowded, reversals }: Timing,
   grid: Grid | null,
 ): string {
   const distance = (interval: number) => (kind === 'index' ? formatNumber(interval, 6) : formatDuration(interval));
@@ -54,6 +54,7 @@ export function timingSentence(
   const more = [
     jitter > 0 ? `jitter up to ${share(jitter)} of a step` : '',
     offGrid > 0 ? `${counted(offGrid, 'row')} off the grid` : '',
+    crowded > 0 ? `${counted(crowded, 'row')} at a place already taken` : '',
     repeats > 0 ? counted(repeats, 'repeated time') : '',
     reversals > 0 ? `${counted(reversals, 'step')} back in time` : '',
   ].filter((text) => text !== '');

@@ -63,7 +63,7 @@ export function noteSentence({ kind, count, lines, texts }: ReadingNote): string
     case 'raggedRows':
       return `${rows} with more or fewer cells than the header${at}.`;
     case 'duplicateTimes':
-      return `${rows} with a time that was there already: one reading a time is kept${at}.`;
+      return `${rows} whose place in time was taken already: one reading a place is kept${at}.`;
     case 'conflictingTimes':
       return `${rows} repeat a time with another reading: ${repeatsKept[texts[0] ?? 'first']}${at}.`;
     case 'sharedPlaces':

@@ -80,7 +80,7 @@ export function readingFailureText(failure: ReadingFailure): FailureText {
       return say(
         `No regular interval fits the times: ${failure.offGrid} of ${failure.rows} rows are off a grid of ${formatNumber(failure.interval, 5)} s.`,
         '',
-        'Choose another time column, or no time: the readings are then numbered.',
+        'Lay them on a grid below, with the mean or the last reading of each bin; or choose another time column, or no time: the readings are then numbered.',
       );
     case 'gridTooLong':
       return say(
@@ -98,7 +98,7 @@ export function readingFailureText(failure: ReadingFailure): FailureText {
       return say(
         `${counted(failure.count, 'row')} repeat a time with another reading.`,
         `first at line ${failure.line}: “${failure.text}”`,
-        'The times may have lost their seconds, or the file lists several tags: export full times, choose the tag column, or read it without time.',
+        'The times may have lost their seconds, or the file lists several tags: export full times, choose the tag column, say below which reading stays, or read it without time.',
       );
     case 'workbookTooLarge':
       return say(

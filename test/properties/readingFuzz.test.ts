@@ -2,14 +2,19 @@ import fc from 'fast-check';
 import { readdirSync, readFileSync } from 'node:fs';
 import { describe, expect, it } from 'vitest';
 import { decodeFile } from '../../src/import/decodeFile.ts';
+import { isWorkbook } from '../../src/import/isWorkbook.ts';
+import type { Dialect } from '../../workers/contract/dialect.ts';
 import type { ReadAnswer, ReadingNote } from '../../workers/contract/reading.ts';
+import { joinFiles } from '../../workers/reading/files/joinFiles.ts';
 import { readRecord } from '../../workers/reading/readRecord.ts';
+import { readWorkbook } from '../../workers/reading/workbook/readWorkbook.ts';
 
 /** 2 000 in the suite; FUZZ_FILES=100000 for the long run. */
 const files = Number(process.env['FUZZ_FILES'] ?? 2000);
 const seed = Number(process.env['FUZZ_SEED'] ?? 20240313);
 const folder = new URL('../../e2e/fixtures/', import.meta.url);
 const fixtures = readdirSync(folder).map((name) => readFileSync(new URL(name, folder)));
+const whole = readFileSync(new URL('export-2.csv', folder), 'utf8');
 const pieces = [
   '"',
   "'",
@@ -42,6 +47,10 @@ const pieces = [
   'é',
   '999999999999999999999',
   '12/13/14',
+  '<0.05',
+  'BDL',
+  'Bad',
+  'Year,Month,Day',
 ]);
 
 type Mutation =
@@ -110,6 +119,27 @@ function isSound({ sniffed, record, failure }: ReadAnswer, lines: number): void 
   }
 }
 
+const workbookFailures = ['workbookDamaged', 'workbookTooLarge', 'workbookEmpty'];
+const linesOf = (text: string) => text.split(/\r\n|\n|\r/u).length;
+
+/** Reads a text alone, and put together with another file whose rows come later. */
+function check(text: string, settings: Partial<Dialect>): void {
+  isSound(readRecord({ text, fileName: 'damaged', settings }), linesOf(text));
+  const joined = joinFiles({
+    files: [
+      { fileName: 'damaged', text },
+      { fileName: 'whole', text: whole },
+    ],
+    settings: {},
+  });
+  if (!joined.ok) {
+    expect(['filesDiffer', 'emptyFile']).toContain(joined.failure.code);
+    return;
+  }
+  const { parts } = joined.value;
+  isSound(readRecord({ text: joined.value.text, fileName: 'both', settings: {}, parts }), linesOf(joined.value.text));
+}
+
 it(`${files} damaged files are read or refused, and nothing is lost in silence`, async () => {
   await fc.assert(
     fc.asyncProperty(
@@ -117,13 +147,19 @@ it(`${files} damaged files are read or refused, and nothing is lost in silence`,
       fc.array(mutation, { minLength: 1, maxLength: 6 }),
       async (index, changes) => {
         const bytes = changes.reduce(mutate, fixtures[index]!);
-        const decoded = await decodeFile(new Blob([Uint8Array.from(bytes)]));
+        const blob = new Blob([Uint8Array.from(bytes)]);
+        if (await isWorkbook(blob)) {
+          const taken = await readWorkbook({ bytes: await blob.arrayBuffer(), sheet: null });
+          if (!taken.ok) expect(workbookFailures).toContain(taken.failure.code);
+          else check(taken.value.text, taken.value.settings);
+          return;
+        }
+        const decoded = await decodeFile(blob);
         if (!decoded.ok) {
           expect(['emptyFile', 'binaryFile']).toContain(decoded.failure.code);
           return;
         }
-        const { text } = decoded.value;
-        isSound(readRecord({ text, fileName: 'damaged', settings: {} }), text.split(/\r\n|\n|\r/u).length);
+        check(decoded.value.text, {});
       },
     ),
     { numRuns: files, seed },

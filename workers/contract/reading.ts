@@ -26,7 +26,8 @@ export interface PreviewRow {
   readonly time: number;
   readonly value: number;
   /** What is wrong with the row, if anything. */
-  readonly trouble: 'none' | 'badStamp' | 'badValue' | 'ragged' | 'duplicate' | 'reversed' | 'offGrid';
+  readonly trouble:
+    'none' | 'badStamp' | 'badValue' | 'belowLimit' | 'leftOut' | 'ragged' | 'duplicate' | 'reversed' | 'offGrid';
 }
 
 /** Found on reading; each with a count and the first places, by line in the file. */
@@ -82,7 +83,9 @@ export interface Timing {
   /** Largest distance of a row that is on the grid from its place, as a fraction of the step. */
   readonly jitter: number;
   readonly offGrid: number;
+  /** Rows whose stamp stands in an earlier row as well; rows of another stamp that came to a place already taken. */
   readonly repeats: number;
+  readonly crowded: number;
   readonly reversals: number;
   /** Grids that can be chosen, the one in use first; empty where the stamps are regular as they stand. */
   readonly offers: readonly NonNullable<Dialect['grid']>[];

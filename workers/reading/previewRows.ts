@@ -8,6 +8,13 @@ const OF_A_KIND = 3;
 
 type Trouble = PreviewRow['trouble'];
 
+function firstLeftOut({ leftOut, rows }: RowsRead): number[] {
+  const found: number[] = [];
+  for (let row = 0; leftOut !== null && row < rows && found.length < OF_A_KIND; row++)
+    if (leftOut[row] === 1) found.push(row);
+  return found;
+}
+
 /**
  * The first rows of a file and the worst, as they stand in it and as they were read.
  *
@@ -29,7 +36,9 @@ export function previewRows(
   const groups: [Trouble, readonly number[]][] = [
     ['badStamp', read.badStamps.map(({ row }) => row)],
     ['ragged', ragged],
-    ['badValue', column === null ? [] : [...column.oddRows, ...column.limitRows]],
+    ['badValue', column?.oddRows ?? []],
+    ['belowLimit', column?.limitRows ?? []],
+    ['leftOut', firstLeftOut(read)],
     ['offGrid', taken?.offGrid ?? []],
     ['duplicate', taken?.duplicates ?? []],
     ['reversed', taken?.reversed ?? []],
@@ -40,8 +49,11 @@ export function previewRows(
     line,
     cells: [...cells],
     time: times?.[row] ?? (times === null ? row + 1 : NaN),
-    value: column?.values.view()[row] ?? NaN,
-    trouble: troubles.get(row) ?? (read.shapes[row] === rowShape.whole ? 'none' : 'ragged'),
+    value: read.leftOut?.[row] === 1 ? NaN : (column?.values.view()[row] ?? NaN),
+    trouble:
+      read.leftOut?.[row] === 1
+        ? 'leftOut'
+        : (troubles.get(row) ?? (read.shapes[row] === rowShape.whole ? 'none' : 'ragged')),
   });
   const wanted = groups.flatMap(([, rows]) => rows.slice(0, OF_A_KIND)).slice(0, MOST_WORST);
   const first = read.first.filter(({ row }) => row < read.rows).map(describe);

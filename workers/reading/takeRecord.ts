@@ -100,6 +100,7 @@ class Taking {
   readonly notes: (ReadingNote | null)[] = [];
   times: Float64Array | null = null;
   timing: Timing | null = null;
+  placement: Placement | null = null;
   /** The grid tried, also where the rows do not lie on it. */
   grid: Grid | null = null;
   readonly values: Float64Array;
@@ -148,6 +149,7 @@ class Taking {
     }
     const { repeats } = plan.dialect;
     const placement = placeOnGrid(stamps, this.values, found, repeats);
+    this.placement = placement;
     const chosen = this.request.grid !== null;
     this.timing = timingOf(stamps, found, placement, chosen);
     const { conflictCount, offGridCount } = placement;
@@ -216,8 +218,13 @@ export function takeRecord(request: TakeRequest): Taken {
   const { times, name } = taking;
   const notes = () => taking.notes.filter((note) => note !== null);
   const failed = (failure: Failure): Taken => {
-    const { grid, timing } = taking;
-    const places = { offGrid: [], duplicates: [], reversed: [] };
+    const { grid, timing, placement } = taking;
+    const fileRows = (list: readonly number[] = []) => list.map((row) => taking.fileRow(row));
+    const places = {
+      offGrid: fileRows(placement?.offGrid),
+      duplicates: fileRows(placement?.duplicates),
+      reversed: fileRows(placement?.reversed),
+    };
     return { record: null, grid, ...places, failure, times, notes: notes(), timing };
   };
   if ('code' in laid) return failed(laid);

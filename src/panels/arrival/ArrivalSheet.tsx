@@ -81,20 +81,22 @@ export function ArrivalSheet({ arrival }: { readonly arrival: Arrival }) {
               ))}
             </ul>
           )}
-          <PreviewTable sniffed={sniffed} />
-          <div className="told-groups">
-            <section aria-label="Readings">
-              <h3>Readings</h3>
-              <ValueLines sniffed={sniffed} />
-            </section>
-            <section aria-label="Time">
-              <h3>Time</h3>
-              <TimeLines sniffed={sniffed} />
-            </section>
-            <section aria-label="Text">
-              <h3>Text</h3>
-              <TextLines sniffed={sniffed} arrival={arrival} />
-            </section>
+          <div className="arrival-body">
+            <div className="told-groups">
+              <section aria-label="Readings">
+                <h3>Readings</h3>
+                <ValueLines sniffed={sniffed} />
+              </section>
+              <section aria-label="Time">
+                <h3>Time</h3>
+                <TimeLines sniffed={sniffed} />
+              </section>
+              <section aria-label="Text">
+                <h3>Text</h3>
+                <TextLines sniffed={sniffed} arrival={arrival} />
+              </section>
+            </div>
+            <PreviewTable sniffed={sniffed} />
           </div>
         </>
       )}

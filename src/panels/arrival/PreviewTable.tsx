@@ -5,8 +5,10 @@ const troubles: Record<PreviewRow['trouble'], string> = {
   none: '',
   badStamp: 'time not read',
   badValue: 'no number: gap',
+  belowLimit: 'below the limit: gap',
+  leftOut: 'left out by its status',
   ragged: 'cells missing or too many',
-  duplicate: 'time was there already',
+  duplicate: 'place was taken already',
   reversed: 'earlier than the row before',
   offGrid: 'off the interval',
 };

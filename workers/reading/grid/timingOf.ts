@@ -27,8 +27,9 @@ function offersFor(grid: Grid, distinct: Float64Array): Grid[] {
   };
   const wide = grid.kind === 'seconds' ? niceStep(distinct) : null;
   for (const step of [grid.step, ...(wide === null ? [] : [wide])])
-    for (const rule of ['nearest', 'binMean', 'last'] as const)
-      if (rule !== 'nearest' || step === grid.step) add({ ...grid, step, rule });
+    // A mean interval with a fraction is no width for bins.
+    for (const rule of Number.isInteger(step) ? (['binMean', 'last'] as const) : []) add({ ...grid, step, rule });
+  if (grid.rule !== 'nearest') add({ ...grid, rule: 'nearest' });
   return offers;
 }
 
@@ -54,6 +55,7 @@ export function timingOf(times: Float64Array, found: GridFound, placement: Place
   let regular = 0;
   for (const [interval, count] of counts) if (Math.abs(interval - grid.step) <= SAME * grid.step) regular += count;
   const count = distinct.length - 1;
+  const repeats = times.reduce((sum, time) => sum + (Number.isNaN(time) ? 0 : 1), 0) - distinct.length;
   const monthly = grid.kind === 'months';
   const varies = monthly ? found.bad > 0 : regular < 0.9 * count;
   const odd = placement === null || placement.jitterCount + placement.offGridCount + placement.duplicateCount > 0;
@@ -64,7 +66,8 @@ export function timingOf(times: Float64Array, found: GridFound, placement: Place
     regular: monthly ? count - found.bad : regular,
     jitter: placement?.jitter ?? 0,
     offGrid: placement?.offGridCount ?? found.bad,
-    repeats: placement?.duplicateCount ?? 0,
+    repeats,
+    crowded: Math.max(0, (placement?.duplicateCount ?? 0) - repeats),
     reversals: placement?.reversedCount ?? 0,
     offers: varies || odd || chosen ? offersFor(grid, distinct) : [],
   };

@@ -61,8 +61,11 @@ function headingRows(rows: readonly HeadRow[], first: number, columns: number): 
       continue;
     }
     if (isRule(row.cells)) continue;
-    const filled = row.cells.filter((cell) => cell.trim() !== '').length;
-    if (filled * 2 < columns && !(columns <= 2 && filled > 0)) break;
+    const cells = row.cells.filter((cell) => cell.trim() !== '');
+    const filled = cells.length;
+    // Beside many columns of time, few have a unit.
+    const units = above.length === 0 && row.cells.length > 2 && cells.every(looksLikeUnit);
+    if (filled * 2 < columns && !(columns <= 2 && filled > 0) && !units) break;
     above.unshift(row);
   }
   return above;
