@@ -76,6 +76,11 @@ export interface Fit {
   readonly names: readonly string[];
   readonly covariance: Square | null;
   readonly standardErrors: readonly number[] | null;
+  /**
+   * Standard error of an estimated Box–Cox λ, from the joint Hessian; null where ln L is not curved there. The other standard errors are
+   * those for known λ.
+   */
+  readonly lambdaStandardError?: number | null;
   /** The exact Gaussian ln L at the estimates, all constants kept, whatever the estimator. */
   readonly logLikelihood: number;
   readonly criteria: Criteria;

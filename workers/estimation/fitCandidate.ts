@@ -6,6 +6,7 @@ import { coefficientNames } from './coefficientNames.ts';
 import { estimateLambda } from './estimateLambda.ts';
 import { fitClosedForm } from './fitClosedForm.ts';
 import { fitSearched } from './fitSearched.ts';
+import { lambdaError } from './lambdaError.ts';
 import { neighbourStarts } from './neighbourStarts.ts';
 import { prepareLikelihood, type PreparedLikelihood } from './prepareLikelihood.ts';
 import { refuseRecord } from './refuseRecord.ts';
@@ -45,11 +46,21 @@ export function fitCandidate(given: FitRequest): Result<Fit> {
   if (refusal !== null) return { ok: false, failure: refusal };
   const { transform } = candidate;
   if (transform.kind !== 'boxCox' || transform.lambda !== 'estimate') return fitAt(request, candidate, undefined);
+  const profile = (at: number, starts = request.starts) =>
+    fitAt({ ...request, starts, effort: 'first' }, candidate, at);
   const lambda = estimateLambda((at) => {
-    const fit = fitAt({ ...request, effort: 'first' }, candidate, at);
+    const fit = profile(at);
     return fit.ok ? { ok: true, value: fit.value.logLikelihood } : fit;
   });
-  return lambda.ok ? fitAt(request, candidate, lambda.value) : lambda;
+  if (!lambda.ok) return lambda;
+  const fit = fitAt(request, candidate, lambda.value);
+  if (!fit.ok) return fit;
+  const { parameters, logLikelihood } = fit.value;
+  const height = (at: number) => {
+    const near = profile(at, [parameters, ...request.starts]);
+    return near.ok ? near.value.logLikelihood : -Infinity;
+  };
+  return { ok: true, value: { ...fit.value, lambdaStandardError: lambdaError(height, lambda.value, logLikelihood) } };
 }
 
 function fitAt(request: FitRequest, candidate: Candidate, lambda: number | undefined): Result<Fit> {
