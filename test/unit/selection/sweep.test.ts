@@ -77,9 +77,10 @@ describe('a sweep', () => {
     // A largest candidate made again is reported twice; the last one counts.
     const names = new Set(found.fits.map(nameOf));
     expect(names.size + found.failed + found.passedOver).toBe(32);
-    const wide = sweep(values, { ...plain, p: [0, 6], q: [0, 6], levels: ['none'] });
-    expect(new Set(wide.fits.map(nameOf)).size + wide.failed + wide.passedOver).toBe(49);
-    expect(wide.passedOver).toBeGreaterThan(5);
+    // In a long record no short moving average comes near: (0,0) … (0,3) are bounded by (0,4).
+    const wide = sweep(record([0.7], [0.4], 2000, 11), { ...plain, p: [0, 4], q: [0, 4], levels: ['none'] });
+    expect(new Set(wide.fits.map(nameOf)).size + wide.failed + wide.passedOver).toBe(25);
+    expect(wide.passedOver).toBeGreaterThanOrEqual(4);
   });
 
   it('passes over nothing that belongs among the best', () => {
