@@ -1,6 +1,7 @@
 import type { Candidate } from '../../workers/contract/candidate.ts';
 import type { Dialect } from '../../workers/contract/dialect.ts';
 import type { View } from '../../workers/contract/envelope.ts';
+import type { SweepRange } from '../../workers/contract/selection.ts';
 
 /** Everything the page can ask for. Panels call these and nothing else; they never touch `workerClient`. */
 export interface Actions {
@@ -31,6 +32,10 @@ export interface Actions {
   readonly choose: (rowId: string | null) => void;
   /** Asks for a prediction of the chosen candidate. */
   readonly predict: (horizon: number) => void;
+
+  /** Fits every candidate of a range of orders; transform, estimator and inputs are those of the chosen candidate. */
+  readonly sweep: (range: SweepRange) => void;
+  readonly stopSweep: () => void;
 
   /** Checks the interval of one parameter of the chosen candidate by simulation. */
   readonly checkInterval: (about: string) => void;

@@ -6,7 +6,7 @@ import type { Failure } from '../../workers/contract/failures.ts';
 import type { Fit } from '../../workers/contract/fit.ts';
 import type { Prediction } from '../../workers/contract/prediction.ts';
 import type { JoinedPart, JoinRequest, ReadAnswer, ReadRecord, WorkbookText } from '../../workers/contract/reading.ts';
-import type { ComparisonGroup } from '../../workers/contract/selection.ts';
+import type { ComparisonGroup, SweepMode, SweepRange, SweepRanking } from '../../workers/contract/selection.ts';
 import type { Result } from '../../workers/contract/result.ts';
 import type { IntegratedIntervals, InvertedInterval } from '../../workers/contract/uncertainty.ts';
 import type { Repair, Span } from '../../workers/contract/series.ts';
@@ -75,6 +75,22 @@ export interface Comparison {
   readonly groups: readonly ComparisonGroup[];
 }
 
+/** A sweep over a range of orders, under way or done. */
+export interface SweepState {
+  readonly recordId: string;
+  readonly range: SweepRange;
+  readonly mode: SweepMode;
+  /** Candidates of the range. */
+  readonly size: number;
+  readonly fits: readonly Fit[];
+  readonly failed: number;
+  readonly passedOver: number;
+  readonly running: boolean;
+  /** Null until it is done. */
+  readonly ranking: SweepRanking | null;
+  readonly failure: Failure | null;
+}
+
 /** Intervals of one fit, which they belong to whatever row shows it. */
 export interface FitIntervals {
   readonly fit: Fit;
@@ -110,6 +126,7 @@ export interface AppState {
   readonly comparison: Comparison;
   /** Prediction for the chosen candidate, or null where none was asked for yet. */
   readonly prediction: { readonly rowId: string; readonly fit: Fit; readonly prediction: Prediction } | null;
+  readonly sweep: SweepState | null;
   readonly intervals: readonly FitIntervals[];
   readonly checks: readonly IntervalCheck[];
   /** True until an autosaved session or the link has been looked at. */

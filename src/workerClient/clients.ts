@@ -1,5 +1,5 @@
 import * as Comlink from 'comlink';
-import type { FitRequest } from '../../workers/contract/candidate.ts';
+import type { Candidate, FitRequest } from '../../workers/contract/candidate.ts';
 import type { DiagnoseRequest, Judgement } from '../../workers/contract/diagnostics.ts';
 import type { Fit } from '../../workers/contract/fit.ts';
 import type { Prediction, PredictRequest } from '../../workers/contract/prediction.ts';
@@ -12,7 +12,14 @@ import type {
   WorkbookText,
 } from '../../workers/contract/reading.ts';
 import type { Result } from '../../workers/contract/result.ts';
-import type { ComparisonGroup } from '../../workers/contract/selection.ts';
+import type {
+  ComparisonGroup,
+  SweepPlan,
+  SweepRange,
+  SweepRanking,
+  SweepReport,
+  SweepRequest,
+} from '../../workers/contract/selection.ts';
 import type {
   IntegratedIntervals,
   IntervalsRequest,
@@ -31,6 +38,11 @@ export interface CoreClient {
   diagnose(key: string, request: DiagnoseRequest): Promise<Result<Judgement>>;
   predict(key: string, request: PredictRequest): Promise<Result<Prediction>>;
   compare(key: string, fits: readonly Fit[]): Promise<Result<readonly ComparisonGroup[]>>;
+  /** Workers that a sweep can be shared out to. */
+  readonly workers: number;
+  planSweep(key: string, range: SweepRange, like: Candidate, workers: number): Promise<Result<SweepPlan>>;
+  sweep(key: string, request: SweepRequest, report: (news: SweepReport) => void): Promise<Result<null>>;
+  rankSweep(key: string, fits: readonly Fit[]): Promise<Result<SweepRanking>>;
   intervals(key: string, request: IntervalsRequest): Promise<Result<IntegratedIntervals>>;
   invert(
     key: string,
@@ -86,6 +98,13 @@ export function createCoreClient(): CoreClient {
       safe(modelling.run<Result<Prediction>>(key, async (remote) => await remote.predict(request))),
     compare: (key, fits) =>
       safe(modelling.run<Result<readonly ComparisonGroup[]>>(key, async (remote) => await remote.compare(fits))),
+    workers: size,
+    planSweep: (key, range, like, workers) =>
+      safe(modelling.run<Result<SweepPlan>>(key, async (remote) => await remote.planSweep(range, like, workers))),
+    sweep: (key, request, report) =>
+      safe(modelling.run<Result<null>>(key, async (remote) => await remote.sweep(request, Comlink.proxy(report)))),
+    rankSweep: (key, fits) =>
+      safe(modelling.run<Result<SweepRanking>>(key, async (remote) => await remote.rankSweep(fits))),
     intervals: (key, request) =>
       safe(modelling.run<Result<IntegratedIntervals>>(key, async (remote) => await remote.intervals(request))),
     invert: (key, request, progress) =>

@@ -1,10 +1,10 @@
-import type { FitRequest } from './candidate.ts';
+import type { Candidate, FitRequest } from './candidate.ts';
 import type { DiagnoseRequest, Judgement } from './diagnostics.ts';
 import type { Fit } from './fit.ts';
 import type { Prediction, PredictRequest } from './prediction.ts';
 import type { JoinedFiles, JoinRequest, ReadAnswer, ReadRequest, WorkbookRequest, WorkbookText } from './reading.ts';
 import type { Result } from './result.ts';
-import type { ComparisonGroup } from './selection.ts';
+import type { ComparisonGroup, SweepPlan, SweepRange, SweepRanking, SweepReport, SweepRequest } from './selection.ts';
 import type { IntegratedIntervals, IntervalsRequest, InversionRequest, InvertedInterval } from './uncertainty.ts';
 
 /** Every worker answers `ready` once its code has loaded. */
@@ -19,6 +19,12 @@ export interface ModellingApi extends Readiness {
   predict(request: PredictRequest): Result<Prediction>;
   /** Which of these fits may be compared by criteria, with differences and weights within each group. */
   compare(fits: readonly Fit[]): Result<readonly ComparisonGroup[]>;
+  /** The candidates of a range, shared out to so many workers. */
+  planSweep(range: SweepRange, like: Candidate, workers: number): Result<SweepPlan>;
+  /** Fits one part of a plan. `report` is a Comlink proxy, called some times a second with what is new. */
+  sweep(request: SweepRequest, report?: (news: SweepReport) => void): Result<null>;
+  /** The standing of a sweep's fits. */
+  rankSweep(fits: readonly Fit[]): Result<SweepRanking>;
   /** Intervals that hold where an estimate ± 2 standard errors does not. */
   intervals(request: IntervalsRequest): Result<IntegratedIntervals>;
   /** The same for one parameter by simulation. `progress` is a Comlink proxy, called with 0…1. */

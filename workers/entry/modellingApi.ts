@@ -7,6 +7,9 @@ import { predictRecord } from '../prediction/predictRecord.ts';
 import { comparisonGroups } from '../selection/comparisonGroups.ts';
 import { integratedIntervals } from '../uncertainty/integratedIntervals.ts';
 import { testInversion } from '../uncertainty/testInversion.ts';
+import { planSweep } from '../selection/planSweep.ts';
+import { rankSweep } from '../selection/rankSweep.ts';
+import { sweepInSteps } from './sweepInSteps.ts';
 import { judgeFit } from '../verdict/judgeFit.ts';
 import { infinityIn } from './infinityIn.ts';
 import { ownBuffers } from './ownBuffers.ts';
@@ -19,6 +22,13 @@ export const modellingApi: ModellingApi = {
   predict: (request) => guarded(request, predictRecord),
   intervals: (request) => guarded(request, integratedIntervals),
   invert: (request, progress) => guarded(request, (checked) => testInversion(checked, inSteps(progress))),
+  planSweep: (range, like, workers) => guarded({}, () => ({ ok: true, value: planSweep(range, like, workers) })),
+  sweep: (request, report) =>
+    guarded(request, (checked) => {
+      sweepInSteps(checked, report);
+      return { ok: true, value: null };
+    }),
+  rankSweep: (fits) => guarded({}, () => ({ ok: true, value: rankSweep(fits) })),
   compare: (fits) => guarded({}, () => ({ ok: true, value: comparisonGroups(fits) })),
 };
 

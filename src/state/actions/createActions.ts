@@ -3,6 +3,7 @@ import type { Actions } from '../actionTypes.ts';
 import { createArrivals } from './arrivals.ts';
 import { createCandidateActions } from './candidateActions.ts';
 import { createHistory } from './history.ts';
+import { createSweepJobs } from './sweepJobs.ts';
 import { createIntervalJobs } from './intervalJobs.ts';
 import { createJobs } from './jobs.ts';
 import { createLinks, type Links } from './links.ts';
@@ -18,6 +19,7 @@ export function createActions(
   platform: Platform,
 ): { actions: Actions; links: Links } {
   const history = createHistory(store);
+  const sweepJobs = createSweepJobs(store, client);
   const intervalJobs = createIntervalJobs(store, client);
   const jobs = createJobs(store, client, intervalJobs.want);
   const arrivals = createArrivals(store, client, jobs, history, (text) => links.openSessionText(text));
@@ -42,6 +44,8 @@ export function createActions(
     dismissArrival: arrivals.dismissArrival,
     forgetRecord: arrivals.forgetRecord,
     ...createCandidateActions(store, jobs, history),
+    sweep: sweepJobs.sweep,
+    stopSweep: sweepJobs.stop,
     checkInterval: intervalJobs.check,
     stopCheck: intervalJobs.stopCheck,
     changeView: (part) => store.set((state) => ({ ...state, view: { ...state.view, ...part } })),

@@ -32,6 +32,10 @@ function directClient(hold: { fits: (() => void)[] | null }): CoreClient {
     diagnose: (_key, request) => Promise.resolve(modellingApi.diagnose(request)),
     predict: (_key, request) => Promise.resolve(modellingApi.predict(request)),
     compare: (_key, fits) => Promise.resolve(modellingApi.compare(fits)),
+    workers: 1,
+    planSweep: (_key, range, like, workers) => Promise.resolve(modellingApi.planSweep(range, like, workers)),
+    sweep: (_key, request, report) => Promise.resolve(modellingApi.sweep(request, report)),
+    rankSweep: (_key, fits) => Promise.resolve(modellingApi.rankSweep(fits)),
     intervals: (_key, request) => Promise.resolve(modellingApi.intervals(request)),
     invert: (_key, request, progress) => Promise.resolve(modellingApi.invert(request, progress)),
     read: (request) => Promise.resolve(readRecord(request)),
@@ -200,4 +204,27 @@ test('starting candidates follow the sampling interval', () => {
   expect(plausibleSeason({ kind: 'months', start: 0, step: 1, zone: null }, 144)).toBe(12);
   expect(plausibleSeason({ kind: 'index', start: 0, step: 1, zone: null }, 900)).toBe(0);
   expect(startingCandidates(daily, 400)[2]!.order).toMatchObject({ D: 1, s: 7 });
+});
+
+describe('a sweep', () => {
+  test('accounts for its whole range, ranks it, and leaves the table of candidates alone', async () => {
+    const before = activeRows(store.get()).length;
+    app.actions.sweep({
+      p: [0, 2],
+      q: [0, 1],
+      P: [0, 0],
+      Q: [0, 0],
+      d: [0, 1],
+      D: [0],
+      s: 0,
+      levels: ['none', 'mean'],
+    });
+    await until(store, () => store.get().sweep?.running === false);
+    const sweep = store.get().sweep!;
+    expect(sweep.size).toBe(18);
+    expect(sweep.fits.length + sweep.failed + sweep.passedOver).toBe(18);
+    const { groups, folded } = sweep.ranking!;
+    expect(groups.flatMap(({ members }) => members).length + folded.length).toBe(sweep.fits.length);
+    expect(activeRows(store.get())).toHaveLength(before);
+  });
 });
