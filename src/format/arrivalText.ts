@@ -2,7 +2,7 @@ import type { Dialect } from '../../workers/contract/dialect.ts';
 import type { ColumnProfile, JoinedPart, Sniffed, Timing } from '../../workers/contract/reading.ts';
 import { formatDuration } from './axisTime.ts';
 import { delimiterName } from './dialectText.ts';
-import { counted, formatNumber } from './numbers.ts';
+import { counted, formatNumber, formatReading } from './numbers.ts';
 
 type Grid = NonNullable<Dialect['grid']>;
 
@@ -31,7 +31,7 @@ export const ruleName = (rule: Grid['rule']): string => rules[rule];
 export function stepText({ kind, step }: Pick<Grid, 'kind' | 'step'>): string {
   if (kind === 'seconds') return formatDuration(step);
   if (kind === 'months') return counted(step, 'month');
-  return formatNumber(step, 6);
+  return formatReading(step);
 }
 
 /** A grid as a choice: what it does, how wide. */
@@ -44,7 +44,7 @@ export function timingSentence(
   { kind, intervals, count, regular, jitter, offGrid, repeats, crowded, reversals }: Timing,
   grid: Grid | null,
 ): string {
-  const distance = (interval: number) => (kind === 'index' ? formatNumber(interval, 6) : formatDuration(interval));
+  const distance = (interval: number) => (kind === 'index' ? formatReading(interval) : formatDuration(interval));
   const several = intervals.slice(0, 3).map((one) => `${distance(one.interval)} × ${one.count}`);
   const apart =
     kind === 'months'

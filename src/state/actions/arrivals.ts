@@ -25,6 +25,9 @@ export interface Arrivals {
 /** Share of the work of a large file that decoding it takes; splitting it into rows is the rest. */
 const DECODING = 0.3;
 
+/** A session file begins with a brace, and a link is short: a long table is not searched for one. */
+const looksLikeSession = (text: string): boolean => /^\s*\{/u.test(text.slice(0, 100)) || text.length < 2_000_000;
+
 export function createArrivals(
   store: Store,
   client: CoreClient,
@@ -137,7 +140,8 @@ export function createArrivals(
       const arrival = start(name, '', '', files);
       const loaded = await load(arrival);
       if (loaded === null) return;
-      if (files.length === 1 && loaded.sheets.length === 0 && (await openSessionText(loaded.text))) return;
+      const mayBeSession = files.length === 1 && loaded.sheets.length === 0 && looksLikeSession(loaded.text);
+      if (mayBeSession && (await openSessionText(loaded.text))) return;
       const settings = matches === null ? loaded.settings : { ...loaded.settings, ...arrival.settings };
       const answer = await read({ ...arrival, ...loaded, settings }, DECODING);
       const now = store.get().arrival;

@@ -71,6 +71,22 @@ test('what is written is read back, with and without the readings', async () => 
   }
 });
 
+test('a session written before parts of stamps, limit words, repeats and sheets still opens, and is read as it was', () => {
+  const [record] = envelope.records;
+  const newer = new Set(['stampColumns', 'limitWords', 'repeats', 'sheet']);
+  const dialect = Object.fromEntries(Object.entries(record!.dialect).filter(([field]) => !newer.has(field)));
+  const old = { ...envelope, records: [{ ...record!, dialect }] };
+  const decoded = decodePayload(JSON.stringify({ envelope: old, inline: null }));
+  if (!decoded.ok) throw new Error(JSON.stringify(decoded.failure));
+  expect(decoded.value.envelope.records[0]!.dialect).toEqual({
+    ...record!.dialect,
+    stampColumns: null,
+    limitWords: [],
+    repeats: 'first',
+    sheet: null,
+  });
+});
+
 test('any candidate orders and texts survive the link', async () => {
   await fc.assert(
     fc.asyncProperty(fc.nat(40), fc.nat(3), fc.string(), async (p, d, why) => {

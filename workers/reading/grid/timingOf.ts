@@ -8,14 +8,22 @@ const KEPT = 8;
 /** Distances this near to the step, as a fraction of it, are the step. */
 const SAME = 1e-6;
 
-/** How often each distance between neighbours occurs, to 6 digits. */
-function countIntervals(distinct: Float64Array): Map<number, number> {
+/** How often each distance between neighbours occurs, alike to a millionth of the step, as a tidy number. */
+function countIntervals(distinct: Float64Array, step: number): [interval: number, count: number][] {
+  const unit = step * SAME;
   const counts = new Map<number, number>();
-  for (let i = 1; i < distinct.length; i++) {
-    const interval = Number((distinct[i]! - distinct[i - 1]!).toPrecision(6));
-    counts.set(interval, (counts.get(interval) ?? 0) + 1);
+  let [run, key] = [0, NaN];
+  // Neighbours mostly lie equally far apart: a run of equal distances is counted once.
+  for (let i = 1; i <= distinct.length; i++) {
+    const next = i < distinct.length ? Math.round((distinct[i]! - distinct[i - 1]!) / unit) : NaN;
+    if (next === key) {
+      run++;
+      continue;
+    }
+    if (run > 0) counts.set(key, (counts.get(key) ?? 0) + run);
+    [run, key] = [1, next];
   }
-  return counts;
+  return [...counts].map(([times, count]) => [Number((times * unit).toPrecision(6)), count]);
 }
 
 /** The grid in use first, then the other rules with its step, and bins wide enough that hardly one is empty. */
@@ -46,17 +54,19 @@ function offersFor(grid: Grid, distinct: Float64Array): Grid[] {
  */
 export function timingOf(times: Float64Array, found: GridFound, placement: Placement | null, chosen: boolean): Timing {
   const distinct = distinctTimes(times);
-  const counts = countIntervals(distinct);
   const { grid } = found;
-  const intervals = [...counts]
-    .sort((a, b) => b[1] - a[1] || a[0] - b[0])
+  // Months are counted in the seconds between their stamps.
+  const monthly = grid.kind === 'months';
+  const counts = countIntervals(distinct, monthly ? grid.step * 86400 : grid.step);
+  const intervals = counts
+    .toSorted((a, b) => b[1] - a[1] || a[0] - b[0])
     .slice(0, KEPT)
     .map(([interval, count]) => ({ interval, count }));
   let regular = 0;
   for (const [interval, count] of counts) if (Math.abs(interval - grid.step) <= SAME * grid.step) regular += count;
   const count = distinct.length - 1;
-  const repeats = times.reduce((sum, time) => sum + (Number.isNaN(time) ? 0 : 1), 0) - distinct.length;
-  const monthly = grid.kind === 'months';
+  let repeats = -distinct.length;
+  for (const time of times) if (!Number.isNaN(time)) repeats++;
   const varies = monthly ? found.bad > 0 : regular < 0.9 * count;
   const odd = placement === null || placement.jitterCount + placement.offGridCount + placement.duplicateCount > 0;
   return {

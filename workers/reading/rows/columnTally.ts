@@ -64,15 +64,21 @@ export class ColumnTally {
   }
 
   private count(cell: string): void {
-    const text = cell.trim().slice(0, LETTERS_KEPT);
-    const before = this.cells.get(text);
-    if (before === undefined && this.cells.size === CELLS_KEPT) this.many = true;
-    else this.cells.set(text, (before ?? 0) + 1);
+    const before = this.cells.get(cell);
+    if (before !== undefined) this.cells.set(cell, before + 1);
+    else if (this.cells.size === CELLS_KEPT) this.many = true;
+    else this.cells.set(cell, 1);
   }
 
-  /** Every distinct cell with its count, where they are few; null where they are many. */
+  /** Every distinct cell without outer blanks, with its count, where they are few; null where they are many. */
   distinctCells(): ReadonlyMap<string, number> | null {
-    return this.many ? null : this.cells;
+    if (this.many) return null;
+    const bare = new Map<string, number>();
+    for (const [cell, count] of this.cells) {
+      const text = cell.trim().slice(0, LETTERS_KEPT);
+      bare.set(text, (bare.get(text) ?? 0) + count);
+    }
+    return bare;
   }
 
   /** Few distinct texts, such as a status or a tag column has; free text gives none. */
