@@ -88,6 +88,8 @@ export function noteSentence({ kind, count, lines, texts }: ReadingNote): string
       return `${counted(count, 'number')} with more digits than can be kept${such}${at}.`;
     case 'badStamps':
       return `${rows} whose time cannot be read${such}: left out${at}.`;
+    case 'noOffset':
+      return `${rows} whose time names no offset from UTC, while others name different ones: left out${at}.`;
     case 'noDate':
       return 'Times of day without a date: days are counted from 1 January 1970.';
     case 'belowLimit':

@@ -49,6 +49,8 @@ export interface ReadingNote {
     | 'digitsLost'
     /** Rows whose stamp could not be read; they are left out. */
     | 'badStamps'
+    /** Rows whose stamp names no offset from UTC while others name different ones; they are left out. */
+    | 'noOffset'
     /** Stamps are times of day without a date: days are counted from 1 January 1970. */
     | 'noDate'
     /** Cells such as `<0.05`: below a detection limit, kept as gaps. */

@@ -133,6 +133,7 @@ class Taking {
     const changes = [...time.clockChanges, ...time.skipped];
     const fileLines = (rows: readonly number[]) => rows.map((row) => read.lines[row]!);
     this.notes.push(noteOf('clockChange', changes.length, fileLines(changes)));
+    this.notes.push(noteOf('noOffset', time.unplaced.length, fileLines(time.unplaced.slice(0, 8))));
     if (read.dateless * 2 > read.rows) this.notes.push(noteOf('noDate', read.dateless, fileLines([0])));
     if (read.badStampCount > MOST_BAD_STAMPS * read.rows) return badStamp(read, plan.dialect.timeColumn!);
     const early = notUsable(this.values, this.name);

@@ -71,3 +71,11 @@ it('places below a detection limit are marked, unless another row fills them', (
   expect(record!.series.values[1]).toBe(0.7);
   expect(record!.notes.find(({ kind }) => kind === 'belowLimit')).toMatchObject({ count: 2, texts: ['<0.5', 'BDL'] });
 });
+
+it('a stamp without offset among stamps of two offsets is left out, and said so', () => {
+  const stamp = (k: number) => (k === 4 ? '04:00' : `2024-03-31T0${k}:00:00+0${k < 3 ? 1 : 2}:00`);
+  const rows = [0, 1, 3, 4, 5, 6, 7, 8, 9].map((k) => `${stamp(k)},${k * k}.5`);
+  const { record } = readRecord({ text: ['time,v', ...rows, ''].join('\n'), fileName: 'a', settings: {} });
+  expect([...record!.series.values]).toEqual([0.5, 1.5, 9.5, NaN, 25.5, 36.5, 49.5, 64.5, 81.5]);
+  expect(record!.notes.find(({ kind }) => kind === 'noOffset')).toMatchObject({ count: 1, lines: [5] });
+});

@@ -8,6 +8,8 @@ export interface TrueTimes {
   readonly zone: string | null;
   readonly clockChanges: readonly number[];
   readonly skipped: readonly number[];
+  /** Rows whose stamp names no offset while those of other rows do, with different ones: their instant is not known. */
+  readonly unplaced: readonly number[];
 }
 
 const HALF_DAY = 43200;
@@ -36,7 +38,7 @@ function countDays(clock: Float64Array): Float64Array {
 export function trueTimes(read: RowsRead, dialect: Pick<Dialect, 'stamp' | 'zone'>): TrueTimes {
   const times = read.times ?? new Float64Array(0);
   const { zone } = dialect;
-  const plain = { times, zone: null, clockChanges: [], skipped: [] };
+  const plain = { times, zone: null, clockChanges: [], skipped: [], unplaced: [] };
   if (dialect.stamp === 'number' || dialect.stamp === null) return plain;
   if (dialect.stamp.startsWith('epoch')) return { ...plain, zone: zone ?? 'UTC' };
   if (read.dateless * 2 > times.length) return { ...plain, times: countDays(times) };
@@ -44,7 +46,7 @@ export function trueTimes(read: RowsRead, dialect: Pick<Dialect, 'stamp' | 'zone
   if (offsets === null) {
     if (zone === null) return plain;
     const resolved = resolveZone(times, zone);
-    return { times: resolved.times, zone, clockChanges: resolved.twice, skipped: resolved.missing };
+    return { times: resolved.times, zone, clockChanges: resolved.twice, skipped: resolved.missing, unplaced: [] };
   }
   const changes: number[] = [];
   let before = noOffset;
@@ -55,5 +57,8 @@ export function trueTimes(read: RowsRead, dialect: Pick<Dialect, 'stamp' | 'zone
   }
   if (changes.length === 0 && zone === null) return { ...plain, zone: before === 0 ? 'UTC' : null };
   const instants = times.map((time, row) => (offsets[row] === noOffset ? NaN : time - offsets[row]! * 60));
-  return { times: instants, zone: zone ?? 'UTC', clockChanges: changes, skipped: [] };
+  const unplaced: number[] = [];
+  for (let row = 0; row < times.length; row++)
+    if (Number.isNaN(instants[row]!) && !Number.isNaN(times[row]!)) unplaced.push(row);
+  return { times: instants, zone: zone ?? 'UTC', clockChanges: changes, skipped: [], unplaced };
 }
