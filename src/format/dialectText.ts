@@ -36,7 +36,9 @@ export function dialectSentence({ dialect, columns, rows }: Sniffed): string {
     dialect.preambleLines > 0 ? `, ${counted(dialect.preambleLines, 'line')} skipped before the table` : '';
   const header = dialect.header ? 'a header row' : 'no header row';
   const units = dialect.unitsRow ? ' and a units row' : '';
-  return `${counted(rows, 'row')}, columns parted by ${delimiters[dialect.delimiter]}, ${decimal}, ${header}${units}${preamble}; ${time}; readings from ${named(dialect.valueColumn)}.`;
+  const cells =
+    dialect.sheet === null ? `columns parted by ${delimiters[dialect.delimiter]}` : `sheet “${dialect.sheet}”`;
+  return `${counted(rows, 'row')}, ${cells}, ${decimal}, ${header}${units}${preamble}; ${time}; readings from ${named(dialect.valueColumn)}.`;
 }
 
 const repeatsKept: Record<string, string> = {
