@@ -1,5 +1,6 @@
 import type { BadCandidateReason, Failure, LinkFailure, ReadingFailure } from '../../workers/contract/failures.ts';
 import { counted, formatNumber } from './numbers.ts';
+import { repairReasonText } from './repairText.ts';
 import { readingFailureText } from './readingFailureText.ts';
 
 /** What happened, where, and what to do. `where` may be empty. */
@@ -163,6 +164,12 @@ export function failureText(failure: Failure): FailureText {
       );
     case 'noSuchParameter':
       return say('The fit has no such parameter.', failure.name, 'Fit the candidate again.');
+    case 'repairRefused':
+      return say(
+        `A repair cannot be made: ${repairReasonText(failure)}.`,
+        `repair ${failure.place} (${failure.id})`,
+        'Nothing was changed. Remove or correct that repair, then try again.',
+      );
     default:
       return isLinkFailure(failure) ? linkText(failure) : readingFailureText(failure);
   }

@@ -55,6 +55,7 @@ const dialect = v.object({
 const repairBase = { id: text(60), at: text(40), why: text(500) };
 const repair = v.variant('kind', [
   v.object({ ...repairBase, kind: v.literal('gap'), from: count, to: count }),
+  v.object({ ...repairBase, kind: v.literal('gaps'), runs: v.pipe(v.array(count), v.maxLength(1_000_000)) }),
   v.object({ ...repairBase, kind: v.literal('scale'), factor: finite, offset: finite, unit: text(60) }),
   v.object({
     ...repairBase,

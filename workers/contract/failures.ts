@@ -46,7 +46,8 @@ export type Failure =
   /** A parameter that the fit does not have. */
   | { readonly code: 'noSuchParameter'; readonly name: string }
   | LinkFailure
-  | ReadingFailure;
+  | ReadingFailure
+  | RepairFailure;
 
 export type BadCandidateReason =
   | 'notAWholeNumber'
@@ -122,3 +123,20 @@ export type LinkFailure =
   | { readonly code: 'linkTooLarge'; readonly characters: number; readonly limit: number }
   | { readonly code: 'linkNewer'; readonly version: number; readonly known: number }
   | { readonly code: 'recordMismatch'; readonly fileName: string; readonly sameFile: boolean };
+
+/** A repair that cannot be replayed: its id, its place in the list (from 1), and the readings there were at that point. */
+export interface RepairFailure {
+  readonly code: 'repairRefused';
+  readonly id: string;
+  readonly place: number;
+  readonly kind: 'gap' | 'gaps' | 'scale' | 'regrid';
+  readonly reason: RepairReason;
+  readonly readings: number;
+}
+
+/**
+ * `outside`: it names readings beyond the record; `number`: a number that means nothing there (a factor of 0, a broken
+ * index); `finer`: a regrid below the present interval; `tooFew`: too few readings would be left; `overflow`: a scale
+ * beyond what numbers hold.
+ */
+export type RepairReason = 'outside' | 'number' | 'finer' | 'tooFew' | 'overflow';

@@ -25,9 +25,16 @@ export interface Span {
   readonly to: number;
 }
 
-/** One recorded, reversible change to the readings, replayed from the raw file. `at` is an ISO stamp, `why` free text. */
-export type Repair = { readonly id: string; readonly at: string; readonly why: string } & (
+/**
+ * What a repair does to the readings. `gaps` holds the lengths of alternating stretches from the first reading on: kept,
+ * made a gap, kept, … ; what follows the last is kept. `scale` gives factor · reading + offset. `regrid`: `step` in the
+ * unit of the axis.
+ */
+export type RepairChange =
   | { readonly kind: 'gap'; readonly from: number; readonly to: number }
+  | { readonly kind: 'gaps'; readonly runs: readonly number[] }
   | { readonly kind: 'scale'; readonly factor: number; readonly offset: number; readonly unit: string }
-  | { readonly kind: 'regrid'; readonly step: number; readonly rule: 'nearest' | 'binMean' | 'last' }
-);
+  | { readonly kind: 'regrid'; readonly step: number; readonly rule: 'nearest' | 'binMean' | 'last' };
+
+/** One recorded, reversible change to the readings, replayed from the raw file. `at` is an ISO stamp, `why` free text. */
+export type Repair = { readonly id: string; readonly at: string; readonly why: string } & RepairChange;
