@@ -11,7 +11,7 @@ export async function makeDossier(input: ReportInput): Promise<Blob> {
   const { series, name } = input.record;
   const { evidence } = input.judgement;
   const figures = {
-    record: recordFigure({ series, name, evidence, prediction: null }, palette),
+    record: recordFigure({ series, name, evidence, prediction: null, events: input.fit.candidate.regressors }, palette),
     lags: lagFigure(evidence, palette),
     prediction: input.prediction === null ? null : predictionFigure(series, name, input.prediction, palette),
   };

@@ -1,3 +1,4 @@
+import type { Regressor } from '../../workers/contract/candidate.ts';
 import type { Evidence } from '../../workers/contract/diagnostics.ts';
 import type { Prediction } from '../../workers/contract/prediction.ts';
 import type { Axis, Series } from '../../workers/contract/series.ts';
@@ -15,13 +16,18 @@ export interface RecordParts {
   readonly name: string;
   readonly evidence: Evidence | null;
   readonly prediction: Prediction | null;
+  /** Events of the chosen candidate, flagged; none when left out. */
+  readonly events?: readonly Regressor[];
+  /** The reading spoken of. */
+  readonly picked?: number | null;
 }
 
 /**
  * The record along the top, gaps hatched; beneath it, on the same time axis, the standardised innovations of the chosen
  * candidate, or nothing where none is chosen.
  */
-export function recordFigure({ series, name, evidence, prediction }: RecordParts, palette: Palette): Figure {
+export function recordFigure(parts: RecordParts, palette: Palette): Figure {
+  const { series, name, evidence, prediction, events = [], picked = null } = parts;
   const { axis, values, unit } = series;
   const withInnovations = evidence !== null;
   const x = (index: readonly number[]) => index.map((t) => chartTime(axis, t));
@@ -35,6 +41,7 @@ export function recordFigure({ series, name, evidence, prediction }: RecordParts
       y: line.value,
       line: { color: palette.ink, width: 1 },
       connectgaps: false,
+      customdata: line.index,
       hovertemplate: '%{y}<extra></extra>',
     },
     ...predicted(series, prediction, palette),
@@ -58,28 +65,72 @@ export function recordFigure({ series, name, evidence, prediction }: RecordParts
         zeroline: true,
         zerolinecolor: palette.hairline,
       }),
-      shapes: withInnovations
-        ? [
-            {
-              type: 'rect',
-              xref: 'paper',
-              x0: 0,
-              x1: 1,
-              yref: 'y2',
-              y0: -2,
-              y1: 2,
-              fillcolor: palette.band,
-              line: { width: 0 },
-              layer: 'below',
-            },
-          ]
-        : [],
+      annotations: flags(events, axis, palette),
+      shapes: [
+        ...uprights(events, picked, axis, palette),
+        ...(withInnovations
+          ? [
+              {
+                type: 'rect',
+                xref: 'paper',
+                x0: 0,
+                x1: 1,
+                yref: 'y2',
+                y0: -2,
+                y1: 2,
+                fillcolor: palette.band,
+                line: { width: 0 },
+                layer: 'below',
+              },
+            ]
+          : []),
+      ],
       yaxis3: { domain: [0, 1], range: [0, 1], fixedrange: true, visible: false, overlaying: 'y' },
     },
     says:
       `${name}: ${counted(values.length, 'place')} from ${timeAt(axis, 0)} to ${timeAt(axis, values.length - 1)}, ${counted(gaps, 'gap')}.` +
       (withInnovations ? ' Beneath it the standardised innovations of the chosen candidate.' : ''),
   };
+}
+
+type Event = Extract<Regressor, { at: number }>;
+
+function eventsOf(inputs: readonly Regressor[]): Event[] {
+  return inputs.filter((input): input is Event => 'at' in input);
+}
+
+/** Events as flags at the top of the record. */
+function flags(inputs: readonly Regressor[], axis: Axis, palette: Palette): object[] {
+  return eventsOf(inputs).map(({ kind, at }) => ({
+    x: chartTime(axis, kind === 'pulse' ? at : at - 0.5),
+    y: 1,
+    yref: 'paper',
+    yanchor: 'top',
+    xanchor: 'left',
+    text: kind,
+    showarrow: false,
+    font: { color: palette.accent, size: 12 },
+    bgcolor: palette.ground,
+  }));
+}
+
+/** Upright lines through record and innovations: events, and the reading spoken of. */
+function uprights(inputs: readonly Regressor[], picked: number | null, axis: Axis, palette: Palette): object[] {
+  const line = (x: number, dash: 'solid' | 'dot', color: string) => ({
+    type: 'line',
+    x0: x,
+    x1: x,
+    yref: 'paper',
+    y0: 0,
+    y1: 1,
+    line: { color, width: 1, dash },
+  });
+  return [
+    ...eventsOf(inputs).map(({ kind, at }) =>
+      line(chartTime(axis, kind === 'pulse' ? at : at - 0.5), 'solid', palette.accent),
+    ),
+    ...(picked === null ? [] : [line(chartTime(axis, picked), 'dot', palette.ink)]),
+  ];
 }
 
 /** Gaps as hatched columns over the whole height. */

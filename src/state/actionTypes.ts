@@ -33,6 +33,8 @@ export interface Actions {
   /** Asks for a prediction of the chosen candidate. */
   readonly predict: (horizon: number) => void;
 
+  /** Marks a reading of the record as the one spoken of. */
+  readonly pick: (index: number | null) => void;
   /** Fits every candidate of a range of orders; transform, estimator and inputs are those of the chosen candidate. */
   readonly sweep: (range: SweepRange) => void;
   readonly stopSweep: () => void;

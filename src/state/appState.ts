@@ -126,6 +126,8 @@ export interface AppState {
   readonly comparison: Comparison;
   /** Prediction for the chosen candidate, or null where none was asked for yet. */
   readonly prediction: { readonly rowId: string; readonly fit: Fit; readonly prediction: Prediction } | null;
+  /** Index of the reading clicked in the record's chart. */
+  readonly picked: number | null;
   readonly sweep: SweepState | null;
   readonly intervals: readonly FitIntervals[];
   readonly checks: readonly IntervalCheck[];

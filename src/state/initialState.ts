@@ -22,6 +22,7 @@ export const initialState: AppState = {
   redoDepth: 0,
   comparison: { rowIds: [], groups: [] },
   prediction: null,
+  picked: null,
   sweep: null,
   intervals: [],
   checks: [],

@@ -17,6 +17,7 @@ export const persistedFields: { readonly [Field in keyof AppState]: Places } = {
   redoDepth: { link: false, browser: false },
   comparison: { link: false, browser: false },
   prediction: { link: false, browser: false },
+  picked: { link: false, browser: false },
   sweep: { link: false, browser: false },
   intervals: { link: false, browser: false },
   checks: { link: false, browser: false },

@@ -6,10 +6,12 @@ interface PlotProps {
   readonly figure: Figure;
   readonly label: string;
   readonly height: number;
+  /** Called with the index of the reading that is clicked. */
+  readonly onPick?: (index: number) => void;
 }
 
 /** A chart. Its text alternative stands beside it; the drawing itself is hidden from readers of the screen. */
-export function Plot({ figure, label, height }: PlotProps) {
+export function Plot({ figure, label, height, onPick }: PlotProps) {
   const frame = useRef<HTMLDivElement>(null);
   const current = useRef(figure);
 
@@ -23,8 +25,9 @@ export function Plot({ figure, label, height }: PlotProps) {
         if (gone || current.current !== figure) return;
         const width = element.clientWidth;
         if (width === 0) return;
-        const { draw } = await import('./plotlyBundle.ts');
+        const { draw, onClickedMark } = await import('./plotlyBundle.ts');
         await draw(element, figure, { width, height });
+        if (onPick !== undefined) onClickedMark(element, onPick);
         element.dataset['drawn'] = 'true';
       });
     redraw();
@@ -39,7 +42,7 @@ export function Plot({ figure, label, height }: PlotProps) {
       gone = true;
       observer.disconnect();
     };
-  }, [figure, height]);
+  }, [figure, height, onPick]);
 
   useEffect(() => {
     const element = frame.current;

@@ -22,6 +22,24 @@ export function draw(
   return Plotly.react(element, figure.data, { ...figure.layout, ...size, autosize: false }, config);
 }
 
+interface Clicked {
+  readonly points: readonly { readonly customdata?: unknown }[];
+}
+
+interface Chart extends HTMLElement {
+  on?(event: 'plotly_click', listener: (clicked: Clicked) => void): void;
+  removeAllListeners?(event: 'plotly_click'): void;
+}
+
+/** Calls back with the number that the clicked mark carries. */
+export function onClickedMark(element: Chart, call: (index: number) => void): void {
+  element.removeAllListeners?.('plotly_click');
+  element.on?.('plotly_click', ({ points }) => {
+    const found = points.map(({ customdata }) => customdata).find((data) => typeof data === 'number');
+    if (typeof found === 'number') call(found);
+  });
+}
+
 export function erase(element: HTMLElement): void {
   Plotly.purge(element);
 }

@@ -6,13 +6,17 @@ import { noteSentence } from '../../format/dialectText.ts';
 import { counted } from '../../format/numbers.ts';
 import type { RecordState } from '../../state/appState.ts';
 import { chosenRow } from '../../state/selectors.ts';
-import { useAppState } from '../../state/useApp.ts';
+import { useActions, useAppState } from '../../state/useApp.ts';
 import { Plot } from '../plot/Plot.tsx';
+import { PickedReading } from './PickedReading.tsx';
 import { usePalette } from '../plot/usePalette.ts';
 
 /** The record along the top, with the innovations of the chosen candidate beneath it on the same time axis. */
 export function RecordPanel({ record }: { readonly record: RecordState }) {
+  const actions = useActions();
   const row = useAppState(chosenRow);
+  const picked = useAppState((state) => state.picked);
+  const events = row?.candidate.regressors;
   const prediction = useAppState((state) => state.prediction);
   const palette = usePalette();
   const { source } = record;
@@ -22,11 +26,18 @@ export function RecordPanel({ record }: { readonly record: RecordState }) {
     () =>
       source.kind === 'loaded'
         ? recordFigure(
-            { series: source.record.series, name: source.record.name, evidence, prediction: forecast },
+            {
+              series: source.record.series,
+              name: source.record.name,
+              evidence,
+              prediction: forecast,
+              ...(events === undefined ? {} : { events }),
+              picked,
+            },
             palette,
           )
         : null,
-    [source, evidence, forecast, palette],
+    [source, evidence, forecast, events, picked, palette],
   );
 
   if (source.kind === 'wanted' || figure === null)
@@ -69,7 +80,13 @@ export function RecordPanel({ record }: { readonly record: RecordState }) {
           </details>
         )}
       </div>
-      <Plot figure={figure} label={evidence === null ? 'Record' : 'Record and innovations'} height={280} />
+      <Plot
+        figure={figure}
+        label={evidence === null ? 'Record' : 'Record and innovations'}
+        height={280}
+        onPick={actions.pick}
+      />
+      <PickedReading series={series} />
     </section>
   );
 }

@@ -44,6 +44,7 @@ export function createActions(
     dismissArrival: arrivals.dismissArrival,
     forgetRecord: arrivals.forgetRecord,
     ...createCandidateActions(store, jobs, history),
+    pick: (index) => store.set((state) => ({ ...state, picked: index })),
     sweep: sweepJobs.sweep,
     stopSweep: sweepJobs.stop,
     checkInterval: intervalJobs.check,
