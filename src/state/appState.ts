@@ -11,18 +11,25 @@ import type { Result } from '../../workers/contract/result.ts';
 import type { IntegratedIntervals, InvertedInterval } from '../../workers/contract/uncertainty.ts';
 import type { Repair, Span } from '../../workers/contract/series.ts';
 
-/** How far a candidate row has come. `grey` is the result it had before the last edit, kept beside the new one. */
+/** How far a candidate row has come. */
 export type RowProgress =
   | { readonly kind: 'waiting' }
   | { readonly kind: 'fitting' }
   | { readonly kind: 'fitted'; readonly fit: Fit; readonly judgement: Judgement | null }
   | { readonly kind: 'failed'; readonly failure: Failure };
 
+/** A result with its evidence, where that is known already. */
+export interface RowResult {
+  readonly fit: Fit;
+  readonly judgement: Judgement | null;
+}
+
 export interface Row {
   readonly id: string;
   readonly candidate: Candidate;
   readonly progress: RowProgress;
-  readonly grey: Fit | null;
+  /** The result before the last edit, kept beside the new one until that is judged. */
+  readonly grey: RowResult | null;
 }
 
 /** A file being looked at before a record is taken from it. */

@@ -1,5 +1,6 @@
 import type { Criteria, Fit } from '../../workers/contract/fit.ts';
 import type { ComparisonGroup } from '../../workers/contract/selection.ts';
+import type { Judgement } from '../../workers/contract/diagnostics.ts';
 import type { AppState, FitIntervals, Row } from './appState.ts';
 import { activeRecord } from './updates.ts';
 
@@ -18,6 +19,28 @@ export function chosenRow(state: AppState): Row | null {
 /** Intervals of a fit; null before they are known. */
 export function intervalsOf(state: AppState, fit: Fit | null): FitIntervals['answer'] | null {
   return state.intervals.find((each) => each.fit === fit)?.answer ?? null;
+}
+
+/** The fit a row shows: its own, or the one before the last edit while the new one is on its way. */
+export function shownFit({ progress, grey }: Row): { readonly fit: Fit; readonly old: boolean } | null {
+  if (progress.kind === 'fitted') return { fit: progress.fit, old: false };
+  return progress.kind === 'failed' || grey === null ? null : { fit: grey.fit, old: true };
+}
+
+/** A judged fit as the panels show it; `old` where it is the one before the last edit. */
+export interface ShownEvidence {
+  readonly fit: Fit;
+  readonly judgement: Judgement;
+  readonly old: boolean;
+}
+
+/** The evidence a row shows, with the fit it was computed from. */
+export function shownEvidence(row: Row | null): ShownEvidence | null {
+  if (row === null || row.progress.kind === 'failed') return null;
+  const { progress, grey } = row;
+  if (progress.kind === 'fitted' && progress.judgement !== null)
+    return { fit: progress.fit, judgement: progress.judgement, old: false };
+  return grey === null || grey.judgement === null ? null : { fit: grey.fit, judgement: grey.judgement, old: true };
 }
 
 /** How many rows of the active record have come how far. */
@@ -55,8 +78,10 @@ export function sortValue(row: Row, column: string, comparison: AppState['compar
   if (column === 'level') return level;
   if (column === 'estimator') return estimator;
   if (column === 'state') return row.progress.kind;
-  if (row.progress.kind !== 'fitted') return null;
-  const { fit, judgement } = row.progress;
+  // A row being fitted again keeps its place by the old result until the new one is there.
+  const fit = shownFit(row)?.fit;
+  if (fit === undefined) return null;
+  const judgement = shownEvidence(row)?.judgement ?? null;
   switch (column) {
     case 'lnL':
       return fit.logLikelihood;
@@ -84,8 +109,9 @@ export function sortValue(row: Row, column: string, comparison: AppState['compar
 
 /** Joint p-value of the portmanteau reading that the verdict rests on; null where there is none. */
 export function whitenessOf(row: Row): number | null {
-  if (row.progress.kind !== 'fitted' || row.progress.judgement === null) return null;
-  const item = row.progress.judgement.verdict.items.find(({ reason }) => reason === 'white' || reason === 'notWhite');
+  const item = shownEvidence(row)?.judgement.verdict.items.find(
+    ({ reason }) => reason === 'white' || reason === 'notWhite',
+  );
   return item?.numbers['p'] ?? null;
 }
 

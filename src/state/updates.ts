@@ -22,7 +22,10 @@ export function withRow(record: RecordState, rowId: string, change: (row: Row) =
 
 /** A row that waits for its result again, keeping the old one in grey. */
 export function waitingRow(row: Row): Row {
-  const old = row.progress.kind === 'fitted' ? row.progress.fit : row.grey;
+  const { progress, grey } = row;
+  // A result that is not judged yet does not replace one that is.
+  const done = progress.kind === 'fitted' && (progress.judgement !== null || grey === null);
+  const old = done ? { fit: progress.fit, judgement: progress.judgement } : grey;
   return { ...row, progress: { kind: 'waiting' }, grey: old };
 }
 

@@ -1,3 +1,4 @@
+import { maximumText } from '../../format/maximumText.ts';
 import { coverageRows } from '../../format/measuredCoverage.ts';
 import { derivedLines, intervalAssumptions } from '../../format/intervalText.ts';
 import { formatInterval, formatReadings, formatSpan, timeAt } from '../../format/axisTime.ts';
@@ -231,7 +232,7 @@ function predictionSection({ prediction, record }: ReportInput): Section {
 
 function searchSection({ fit }: ReportInput): Section {
   const { outcome, warnings } = fit;
-  const rivals = outcome.maxima.filter(({ admissible }) => admissible).slice(1);
+  const maxima = outcome.maxima.filter(({ admissible }) => admissible);
   return {
     heading: 'How it was found',
     blocks: [
@@ -245,10 +246,8 @@ function searchSection({ fit }: ReportInput): Section {
               : `${counted(outcome.starts, 'start')}, ${counted(outcome.evaluations, 'evaluation')}, ended ${outcome.status}`,
           ],
           [
-            'Other maxima within 2 in ln L',
-            rivals.length === 0
-              ? 'none found'
-              : rivals.map(({ logLikelihood }) => formatFixed(logLikelihood, 3)).join(', '),
+            'Maxima within 2 of the best in ln L',
+            maxima.length === 0 ? 'none: closed form' : maxima.map(maximumText).join(' · '),
           ],
           ['Seed', String(fit.seed)],
           ['Core', fit.coreVersion],

@@ -3,7 +3,7 @@ import type { Row } from '../../state/appState.ts';
 import { failureText } from '../../format/failureText.ts';
 import { candidateName, estimatorName, orderNotation } from '../../format/notation.ts';
 import { formatFixed, formatNumber, formatPValue } from '../../format/numbers.ts';
-import { standingOf, whitenessOf } from '../../state/selectors.ts';
+import { shownEvidence, shownFit, standingOf, whitenessOf } from '../../state/selectors.ts';
 import { useActions, useAppState } from '../../state/useApp.ts';
 import { LevelSwitch } from './LevelSwitch.tsx';
 import { OrderEditor } from './OrderEditor.tsx';
@@ -19,11 +19,12 @@ interface RowProps {
 export function CandidateRow({ row, chosen, columns }: RowProps) {
   const actions = useActions();
   const [editing, setEditing] = useState(false);
-  const { candidate, progress, grey } = row;
-  const fit = progress.kind === 'fitted' ? progress.fit : null;
-  const judgement = progress.kind === 'fitted' ? progress.judgement : null;
+  const { candidate, progress } = row;
+  const old = shownFit(row)?.old === true;
+  const shown = shownEvidence(row);
+  const judgement = shown?.judgement ?? null;
   const failure = progress.kind === 'failed' ? failureText(progress.failure) : null;
-  const state = progress.kind === 'fitted' && judgement === null ? 'searching on' : progress.kind;
+  const state = progress.kind === 'fitted' && progress.judgement === null ? 'searching on' : progress.kind;
 
   return (
     <>
@@ -61,7 +62,7 @@ export function CandidateRow({ row, chosen, columns }: RowProps) {
           <LevelSwitch row={row} />
         </td>
         {columns.map((name) => (
-          <td key={name} className="number">
+          <td key={name} className={old ? 'number grey' : 'number'}>
             <Cell name={name} row={row} />
           </td>
         ))}
@@ -70,14 +71,12 @@ export function CandidateRow({ row, chosen, columns }: RowProps) {
         </td>
         <td className="standing">
           {judgement !== null && (
-            <span className={`mark ${judgement.verdict.standing}`}>{judgement.verdict.standing}</span>
-          )}
-          <span className={`state ${state}`}>{state}</span>
-          {grey !== null && fit === null && (
-            <span className="grey" title="the result before the last change">
-              was {formatNumber(grey.logLikelihood, 6)}
+            <span className={`mark ${judgement.verdict.standing} ${shown?.old === true ? 'grey' : ''}`}>
+              {judgement.verdict.standing}
             </span>
           )}
+          <span className={`state ${state}`}>{state}</span>
+          {shown?.old === true && <span className="grey">numbers before the last change</span>}
         </td>
       </tr>
       {failure !== null && (
@@ -100,8 +99,8 @@ export function CandidateRow({ row, chosen, columns }: RowProps) {
 
 function Cell({ name, row }: { readonly name: string; readonly row: Row }) {
   const comparison = useAppState((state) => state.comparison);
-  if (row.progress.kind !== 'fitted') return <>–</>;
-  const { fit } = row.progress;
+  const fit = shownFit(row)?.fit;
+  if (fit === undefined) return <>–</>;
   switch (name) {
     case 'lnL':
       return <>{formatFixed(fit.logLikelihood, 2)}</>;

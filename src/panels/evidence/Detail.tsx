@@ -1,22 +1,24 @@
+import { maximumText } from '../../format/maximumText.ts';
+import { estimatorName } from '../../format/notation.ts';
 import { counted, formatFixed, formatNumber } from '../../format/numbers.ts';
 import { warningText } from '../../format/warningText.ts';
 import type { RecordState } from '../../state/appState.ts';
-import { chosenRow } from '../../state/selectors.ts';
+import { chosenRow, shownEvidence } from '../../state/selectors.ts';
 import { useAppState } from '../../state/useApp.ts';
 import { RootTable } from './RootTable.tsx';
 
 /** Roots of the chosen model, and how it was found. */
 export function Detail({ record }: { readonly record: RecordState }) {
   const row = useAppState(chosenRow);
-  if (row?.progress.kind !== 'fitted' || row.progress.judgement === null || record.source.kind !== 'loaded')
-    return null;
-  const { fit, judgement } = row.progress;
+  const shown = shownEvidence(row);
+  if (shown === null || record.source.kind !== 'loaded') return null;
+  const { fit, judgement, old } = shown;
   const { roots } = judgement.evidence;
   const { axis } = record.source.record.series;
   const { outcome, criteria } = fit;
-  const rivals = outcome.maxima.filter(({ admissible }) => admissible).slice(1);
+  const maxima = outcome.maxima.filter(({ admissible }) => admissible);
   return (
-    <div className="detail">
+    <div className={old ? 'detail old' : 'detail'}>
       <section aria-labelledby="roots-name" id="panel-roots">
         <h3 id="roots-name">Period against damping</h3>
         <RootTable roots={roots} axis={axis} />
@@ -40,11 +42,17 @@ export function Detail({ record }: { readonly record: RecordState }) {
               ? 'closed form, no search'
               : `${counted(outcome.starts, 'start')}, ${counted(outcome.evaluations, 'evaluation')}, ${outcome.status === 'boundary' ? 'on the boundary' : outcome.status}`}
           </dd>
-          <dt>Other maxima within 2</dt>
+          <dt>Estimator</dt>
+          <dd>{estimatorName(fit.candidate.estimator)}</dd>
+          <dt>Maxima within 2 of the best</dt>
           <dd>
-            {rivals.length === 0
-              ? 'none found'
-              : rivals.map(({ logLikelihood }) => formatFixed(logLikelihood, 3)).join(', ')}
+            {maxima.length === 0
+              ? 'none: closed form'
+              : maxima.map((maximum, i) => (
+                  <span key={i} className="line">
+                    {maximumText(maximum)}
+                  </span>
+                ))}
           </dd>
           <dt>Seed, core</dt>
           <dd>

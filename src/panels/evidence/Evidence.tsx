@@ -3,7 +3,7 @@ import { lagFigure } from '../../figures/lagFigure.ts';
 import { failureText } from '../../format/failureText.ts';
 import { candidateName } from '../../format/notation.ts';
 import type { RecordState } from '../../state/appState.ts';
-import { chosenRow } from '../../state/selectors.ts';
+import { chosenRow, shownEvidence } from '../../state/selectors.ts';
 import { useAppState } from '../../state/useApp.ts';
 import { Plot } from '../plot/Plot.tsx';
 import { usePalette } from '../plot/usePalette.ts';
@@ -13,7 +13,9 @@ import { VerdictPanel } from './VerdictPanel.tsx';
 export function Evidence({ record }: { readonly record: RecordState }) {
   const row = useAppState(chosenRow);
   const palette = usePalette();
-  const judgement = row?.progress.kind === 'fitted' ? row.progress.judgement : null;
+  const shown = useMemo(() => shownEvidence(row), [row]);
+  const judgement = shown?.judgement ?? null;
+  const old = shown?.old === true;
   const figure = useMemo(
     () => (judgement === null ? null : lagFigure(judgement.evidence, palette)),
     [judgement, palette],
@@ -21,7 +23,12 @@ export function Evidence({ record }: { readonly record: RecordState }) {
   const axis = record.source.kind === 'loaded' ? record.source.record.series.axis : null;
 
   return (
-    <div className="evidence">
+    <div className={old ? 'evidence old' : 'evidence'}>
+      {old && (
+        <p className="quiet" role="status">
+          Before the last change; the new result is on its way.
+        </p>
+      )}
       <section className="verdict" aria-label="Verdict">
         {row === null ? (
           <p className="question">Choose a candidate: may it be defended, and on what evidence?</p>
@@ -39,7 +46,7 @@ export function Evidence({ record }: { readonly record: RecordState }) {
             </p>
           </>
         ) : (
-          <VerdictPanel candidate={row.candidate} verdict={judgement.verdict} axis={axis} />
+          <VerdictPanel candidate={shown?.fit.candidate ?? row.candidate} verdict={judgement.verdict} axis={axis} />
         )}
       </section>
       {figure !== null && (

@@ -3,7 +3,7 @@ import { Choice } from '../../components/Choice.tsx';
 import { equationLines, signSentence } from '../../format/equationText.ts';
 import { candidateName } from '../../format/notation.ts';
 import type { RecordState } from '../../state/appState.ts';
-import { chosenRow } from '../../state/selectors.ts';
+import { chosenRow, shownEvidence } from '../../state/selectors.ts';
 import { useActions, useAppState } from '../../state/useApp.ts';
 import { EstimateTable } from './EstimateTable.tsx';
 import { HowSure } from './HowSure.tsx';
@@ -13,14 +13,14 @@ export function SizeAndShape({ record }: { readonly record: RecordState }) {
   const actions = useActions();
   const row = useAppState(chosenRow);
   const signs = useAppState((state) => state.view.signs);
-  if (row?.progress.kind !== 'fitted' || row.progress.judgement === null || record.source.kind !== 'loaded')
-    return null;
-  const { fit, judgement } = row.progress;
+  const shown = shownEvidence(row);
+  if (shown === null || record.source.kind !== 'loaded') return null;
+  const { fit, judgement, old } = shown;
   const { equation } = judgement.evidence;
   const { unit } = record.source.record.series;
   return (
-    <section aria-labelledby="equation-name" className="shape" id="panel-estimates">
-      <h3 id="equation-name">Size and shape · {candidateName(row.candidate)}</h3>
+    <section aria-labelledby="equation-name" className={old ? 'shape old' : 'shape'} id="panel-estimates">
+      <h3 id="equation-name">Size and shape · {candidateName(fit.candidate)}</h3>
       {equationLines(fit, equation, unit).map((line, i) => (
         <p key={line} className={i === 0 ? 'equation' : undefined}>
           {line}

@@ -5,7 +5,7 @@ import { formatInterval, formatSpan } from '../../format/axisTime.ts';
 import { noteSentence } from '../../format/dialectText.ts';
 import { counted } from '../../format/numbers.ts';
 import type { RecordState } from '../../state/appState.ts';
-import { chosenRow } from '../../state/selectors.ts';
+import { chosenRow, shownEvidence } from '../../state/selectors.ts';
 import { useActions, useAppState } from '../../state/useApp.ts';
 import { Plot } from '../plot/Plot.tsx';
 import { PickedReading } from './PickedReading.tsx';
@@ -20,7 +20,7 @@ export function RecordPanel({ record }: { readonly record: RecordState }) {
   const prediction = useAppState((state) => state.prediction);
   const palette = usePalette();
   const { source } = record;
-  const evidence = row?.progress.kind === 'fitted' ? (row.progress.judgement?.evidence ?? null) : null;
+  const evidence = shownEvidence(row)?.judgement.evidence ?? null;
   const forecast = prediction?.rowId === row?.id ? (prediction?.prediction ?? null) : null;
   const figure = useMemo(
     () =>

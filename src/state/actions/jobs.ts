@@ -2,6 +2,7 @@ import type { Candidate } from '../../../workers/contract/candidate.ts';
 import type { Fit } from '../../../workers/contract/fit.ts';
 import type { CoreClient } from '../../workerClient/clients.ts';
 import type { AppState, RecordState, Row } from '../appState.ts';
+import { shownFit } from '../selectors.ts';
 import { candidateKey } from '../startingCandidates.ts';
 import type { Store } from '../store.ts';
 import { activeRecord, waitingRow, withProgress, withRecord, withRow } from '../updates.ts';
@@ -109,10 +110,11 @@ export function createJobs(store: Store, client: CoreClient, wantIntervals: (row
     const own = comparisons;
     const record = activeRecord(store.get());
     if (record === null) return;
-    const rows = record.rows.filter(({ progress }) => progress.kind === 'fitted');
+    // Rows on their way take part with their old result, so that they keep their place among the others.
+    const rows = record.rows.filter((row) => shownFit(row) !== null);
     const answer = await client.compare(
       `compare-${own}`,
-      rows.flatMap(({ progress }) => (progress.kind === 'fitted' ? [progress.fit] : [])),
+      rows.map((row) => shownFit(row)!.fit),
     );
     if (answer.ok && own === comparisons)
       store.set((state) => {

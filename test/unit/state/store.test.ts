@@ -96,7 +96,7 @@ describe('a record and its candidates', () => {
     hold.fits = [];
     app.actions.changeCandidate(first!.id, { level: 'none' });
     const [changed, other] = activeRows(store.get());
-    expect(changed!.grey?.candidate.level).toBe('mean');
+    expect(changed!.grey?.fit.candidate.level).toBe('mean');
     expect(other).toBe(second);
     const release = hold.fits;
     hold.fits = null;
