@@ -28,6 +28,7 @@ import type {
 } from '../../workers/contract/uncertainty.ts';
 import type { ModellingApi, ReadingApi, WorkbookApi } from '../../workers/contract/workerApis.ts';
 import { WorkerHandle } from './workerHandle.ts';
+import type { Shape, ShapeRequest } from '../../workers/contract/shape.ts';
 import { failureOf, WorkerPool } from './workerPool.ts';
 
 const MOST_WORKERS = 4;
@@ -37,6 +38,7 @@ export interface CoreClient {
   fit(key: string, request: FitRequest): Promise<Result<Fit>>;
   diagnose(key: string, request: DiagnoseRequest): Promise<Result<Judgement>>;
   predict(key: string, request: PredictRequest): Promise<Result<Prediction>>;
+  shape(key: string, request: ShapeRequest): Promise<Result<Shape>>;
   compare(key: string, fits: readonly Fit[]): Promise<Result<readonly ComparisonGroup[]>>;
   /** Workers that a sweep can be shared out to. */
   readonly workers: number;
@@ -96,6 +98,7 @@ export function createCoreClient(): CoreClient {
       safe(modelling.run<Result<Judgement>>(key, async (remote) => await remote.diagnose(request))),
     predict: (key, request) =>
       safe(modelling.run<Result<Prediction>>(key, async (remote) => await remote.predict(request))),
+    shape: (key, request) => safe(modelling.run<Result<Shape>>(key, async (remote) => await remote.shape(request))),
     compare: (key, fits) =>
       safe(modelling.run<Result<readonly ComparisonGroup[]>>(key, async (remote) => await remote.compare(fits))),
     workers: size,

@@ -7,6 +7,7 @@ import type { Fit } from '../../workers/contract/fit.ts';
 import type { Prediction, PredictRequest } from '../../workers/contract/prediction.ts';
 import type { ReadAnswer, ReadRequest } from '../../workers/contract/reading.ts';
 import type { ComparisonGroup } from '../../workers/contract/selection.ts';
+import type { Shape, ShapeRequest } from '../../workers/contract/shape.ts';
 import type { Series } from '../../workers/contract/series.ts';
 
 type Leaf = string | number | boolean | null | undefined | Float64Array | Int32Array | Uint8Array;
@@ -38,6 +39,8 @@ describe('contracts', () => {
       predictRequest: Proof<PredictRequest>;
       prediction: Proof<Prediction>;
       comparison: Proof<readonly ComparisonGroup[]>;
+      shapeRequest: Proof<ShapeRequest>;
+      shape: Proof<Shape>;
       readRequest: Proof<ReadRequest>;
       readAnswer: Proof<ReadAnswer>;
       failure: Proof<Failure>;
@@ -52,6 +55,8 @@ describe('contracts', () => {
       predictRequest: true,
       prediction: true,
       comparison: true,
+      shapeRequest: true,
+      shape: true,
       readRequest: true,
       readAnswer: true,
       failure: true,

@@ -53,6 +53,8 @@ export interface ShapeSpectrum {
   /** What the surroundings of each of these frequencies would give without a period. */
   readonly background: Float64Array;
   readonly periods: readonly NamedPeriod[];
+  /** Readings averaged into one before the transform, on long records; 1: none. Periods below twice this are not looked for. */
+  readonly averaged: number;
   /** Fisher's test of the largest ordinate against independent readings. */
   readonly fisher: { readonly statistic: number; readonly pValue: number; readonly ordinates: number };
 }
@@ -129,7 +131,7 @@ export type Sureness = 'clear' | 'likely' | 'open';
  * One reason of the advice as data. Numbers by code:
  * `unitRoot`, `stationary`, `bothRejected`, `neitherRejected`: adf, adfCritical, kpss, kpssCritical; `varianceFalls`, `varianceRises`: d, before, after;
  * `overDifferenced`: d, lagOne; `tooFew`: readings; `noSeason`: none; `periodStands`: period, share, pValue; `lagSeason`: s, r;
- * `seasonPersists`, `seasonFixed`: s, r; `seasonTooLong`: period, most; `spreadGrows`: slope, error, ratio;
+ * `seasonPersists`, `seasonFixed`: s, r; `seasonTooLong`: period, most; `seasonNotWhole`: period; `spreadGrows`: slope, error, ratio;
  * `spreadEven`: slope, error; `levelsAlike`: ratio; `notPositive`: none; `lambda`: value, from, to; `white`: lags;
  * `partialsEnd`, `correlationsEnd`: lag, band; `bothDecay`: partialLag, correlationLag; `seasonalMemory`: s, r; `drift`: mean, error.
  */
@@ -150,6 +152,7 @@ export interface AdviceReason {
     | 'seasonPersists'
     | 'seasonFixed'
     | 'seasonTooLong'
+    | 'seasonNotWhole'
     | 'spreadGrows'
     | 'spreadEven'
     | 'levelsAlike'
@@ -191,7 +194,11 @@ export interface Shape {
   readonly seasonal: readonly SeasonalView[];
   readonly spread: SpreadAgainstLevel;
   readonly differencing: readonly DifferencingLine[];
-  /** Of the readings as shown; null where too few are left. */
-  readonly unitRoots: { readonly constant: UnitRootPair; readonly trend: UnitRootPair } | null;
+  /** Of the readings as shown, `averaged` of them taken as one on long records; null where too few are left. */
+  readonly unitRoots: {
+    readonly constant: UnitRootPair;
+    readonly trend: UnitRootPair;
+    readonly averaged: number;
+  } | null;
   readonly advice: ShapeAdvice;
 }

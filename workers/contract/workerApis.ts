@@ -6,6 +6,7 @@ import type { JoinedFiles, JoinRequest, ReadAnswer, ReadRequest, WorkbookRequest
 import type { Result } from './result.ts';
 import type { ComparisonGroup, SweepPlan, SweepRange, SweepRanking, SweepReport, SweepRequest } from './selection.ts';
 import type { IntegratedIntervals, IntervalsRequest, InversionRequest, InvertedInterval } from './uncertainty.ts';
+import type { Shape, ShapeRequest } from './shape.ts';
 
 /** Every worker answers `ready` once its code has loaded. */
 interface Readiness {
@@ -17,6 +18,8 @@ export interface ModellingApi extends Readiness {
   fit(request: FitRequest): Result<Fit>;
   diagnose(request: DiagnoseRequest): Result<Judgement>;
   predict(request: PredictRequest): Result<Prediction>;
+  /** The shape of the record before any model, with advice what to try first. */
+  shape(request: ShapeRequest): Result<Shape>;
   /** Which of these fits may be compared by criteria, with differences and weights within each group. */
   compare(fits: readonly Fit[]): Result<readonly ComparisonGroup[]>;
   /** The candidates of a range, shared out to so many workers. */

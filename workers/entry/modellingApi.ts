@@ -3,6 +3,7 @@ import type { Failure } from '../contract/failures.ts';
 import type { Result } from '../contract/result.ts';
 import type { ModellingApi } from '../contract/workerApis.ts';
 import { fitCandidate } from '../estimation/fitCandidate.ts';
+import { describeShape } from '../identification/describeShape.ts';
 import { predictRecord } from '../prediction/predictRecord.ts';
 import { comparisonGroups } from '../selection/comparisonGroups.ts';
 import { integratedIntervals } from '../uncertainty/integratedIntervals.ts';
@@ -29,6 +30,7 @@ export const modellingApi: ModellingApi = {
       return { ok: true, value: null };
     }),
   rankSweep: (fits) => guarded({}, () => ({ ok: true, value: rankSweep(fits) })),
+  shape: (request) => guarded(request, describeShape),
   compare: (fits) => guarded({}, () => ({ ok: true, value: comparisonGroups(fits) })),
 };
 

@@ -104,7 +104,7 @@ function regress(
   if (!(residual > 0)) return null;
   return {
     gamma: solved[place]! / scale[place]!,
-    gammaError: Math.sqrt(((residual / (count - columns)) * unit[place]!) / scale[place]! ** 2),
+    gammaError: Math.sqrt(((residual / (count - columns)) * unit[place]) / scale[place]! ** 2),
     residual,
     columns,
   };

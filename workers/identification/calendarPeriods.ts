@@ -15,7 +15,7 @@ const MONTHS: readonly (readonly [CalendarPeriod, number])[] = [
 
 /**
  * The lengths of time that people keep, in readings: hour, shift of eight hours, day, week and the Gregorian year of 365.2425 days; for
- * monthly axes quarter and year. Longest first, so that what repeats daily is not put down to a shift.
+ * monthly axes quarter and year. Longest first.
  *
  * @param axis its interval
  * @returns those of at least two readings; none where the record has no time

@@ -36,7 +36,7 @@ export function spectralBackground(ordinates: Float64Array): Float64Array {
   let before = medianAbout(flat, 0);
   result[0] = before;
   while (from < m - 1) {
-    const to = Math.min(m - 1, from + Math.max(1, Math.floor(widthAt(from) / 8)));
+    const to = Math.min(m - 1, from + Math.max(1, Math.floor(widthAt(from) / 4)));
     const after = medianAbout(flat, to);
     for (let i = from + 1; i <= to; i++) result[i] = before + ((after - before) * (i - from)) / (to - from);
     from = to;

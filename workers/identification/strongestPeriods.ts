@@ -33,7 +33,8 @@ export function strongestPeriods(values: Float64Array, axis: Axis, step = 1): Sh
   const total = ordinates.reduce((sum, value) => sum + value, 0);
   const inside = n % 2 === 0 ? m - 1 : m;
   const none = { frequencies: new Float64Array(0), ordinates: new Float64Array(0), background: new Float64Array(0) };
-  if (n < 16 || !(total > 0)) return { ...none, periods: [], fisher: { statistic: NaN, pValue: NaN, ordinates: 0 } };
+  if (n < 16 || !(total > 0))
+    return { ...none, periods: [], averaged: step, fisher: { statistic: NaN, pValue: NaN, ordinates: 0 } };
   const background = spectralBackground(ordinates);
   let largest = 0;
   let sum = 0;
@@ -58,6 +59,7 @@ export function strongestPeriods(values: Float64Array, axis: Axis, step = 1): Sh
   return {
     ...drawn(frequencies, ordinates, background, step),
     periods,
+    averaged: step,
     fisher: { statistic, pValue: fisherG(statistic, inside), ordinates: inside },
   };
 }

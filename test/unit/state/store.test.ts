@@ -31,6 +31,7 @@ function directClient(hold: { fits: (() => void)[] | null }): CoreClient {
     fit: (_key, request) => later<Result<Fit>>(() => modellingApi.fit(request)),
     diagnose: (_key, request) => Promise.resolve(modellingApi.diagnose(request)),
     predict: (_key, request) => Promise.resolve(modellingApi.predict(request)),
+    shape: (_key, request) => Promise.resolve(modellingApi.shape(request)),
     compare: (_key, fits) => Promise.resolve(modellingApi.compare(fits)),
     workers: 1,
     planSweep: (_key, range, like, workers) => Promise.resolve(modellingApi.planSweep(range, like, workers)),
