@@ -2,6 +2,7 @@ import type { Candidate } from '../../workers/contract/candidate.ts';
 import type { Dialect } from '../../workers/contract/dialect.ts';
 import type { View } from '../../workers/contract/envelope.ts';
 import type { SweepRange } from '../../workers/contract/selection.ts';
+import type { RepairChange } from '../../workers/contract/series.ts';
 
 /** Everything the page can ask for. Panels call these and nothing else; they never touch `workerClient`. */
 export interface Actions {
@@ -42,6 +43,14 @@ export interface Actions {
   /** Checks the interval of one parameter of the chosen candidate by simulation. */
   readonly checkInterval: (about: string) => void;
   readonly stopCheck: (about: string) => void;
+
+  /** Makes a repair at the end of the list; fits are made again. Trouble becomes a notice, and nothing changes. */
+  readonly repair: (change: RepairChange, why: string) => Promise<void>;
+  readonly removeRepair: (id: string) => Promise<void>;
+  /** Exchanges a repair with the one before (−1) or behind it (1). */
+  readonly moveRepair: (id: string, by: -1 | 1) => Promise<void>;
+  /** Writes down why a repair was made. */
+  readonly explainRepair: (id: string, why: string) => void;
 
   readonly changeView: (part: Partial<View>) => void;
   readonly undo: () => void;

@@ -4,6 +4,7 @@ import type { Judgement } from '../../workers/contract/diagnostics.ts';
 import type { View } from '../../workers/contract/envelope.ts';
 import type { Failure } from '../../workers/contract/failures.ts';
 import type { Fit } from '../../workers/contract/fit.ts';
+import type { ForensicReport } from '../../workers/contract/forensics.ts';
 import type { Prediction } from '../../workers/contract/prediction.ts';
 import type { JoinedPart, JoinRequest, ReadAnswer, ReadRecord, WorkbookText } from '../../workers/contract/reading.ts';
 import type { ComparisonGroup, SweepMode, SweepRange, SweepRanking } from '../../workers/contract/selection.ts';
@@ -58,7 +59,10 @@ export type Source =
       readonly kind: 'loaded';
       readonly fileName: string;
       readonly text: string;
+      /** The record as it is worked on, repairs included. */
       readonly record: ReadRecord;
+      /** The record as read from the file; repairs are replayed from it, and nothing changes it. */
+      readonly raw: ReadRecord;
       /** One of the invented examples that come with the page. */
       readonly example: boolean;
     }
@@ -112,6 +116,12 @@ export interface IntervalCheck {
   readonly answer: Result<InvertedInterval> | null;
 }
 
+/** The report on one state of a record, which its hash names. */
+export interface Inspection {
+  readonly seriesHash: string;
+  readonly answer: Result<ForensicReport>;
+}
+
 /** A message to the person; stays until dismissed. `failure` says what, where and what to do through `format`. */
 export interface Notice {
   readonly id: string;
@@ -138,6 +148,8 @@ export interface AppState {
   readonly sweep: SweepState | null;
   readonly intervals: readonly FitIntervals[];
   readonly checks: readonly IntervalCheck[];
+  /** What the logger did to the active record, repairs included; null until it is known. */
+  readonly forensics: Inspection | null;
   /** True until an autosaved session or the link has been looked at. */
   readonly opening: boolean;
 }

@@ -26,5 +26,6 @@ export const initialState: AppState = {
   sweep: null,
   intervals: [],
   checks: [],
+  forensics: null,
   opening: true,
 };

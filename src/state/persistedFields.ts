@@ -21,5 +21,6 @@ export const persistedFields: { readonly [Field in keyof AppState]: Places } = {
   sweep: { link: false, browser: false },
   intervals: { link: false, browser: false },
   checks: { link: false, browser: false },
+  forensics: { link: false, browser: false },
   opening: { link: false, browser: false },
 };

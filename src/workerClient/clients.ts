@@ -2,11 +2,13 @@ import * as Comlink from 'comlink';
 import type { Candidate, FitRequest } from '../../workers/contract/candidate.ts';
 import type { DiagnoseRequest, Judgement } from '../../workers/contract/diagnostics.ts';
 import type { Fit } from '../../workers/contract/fit.ts';
+import type { ForensicReport, RepairedRecord } from '../../workers/contract/forensics.ts';
 import type { Prediction, PredictRequest } from '../../workers/contract/prediction.ts';
 import type {
   JoinedFiles,
   JoinRequest,
   ReadAnswer,
+  ReadingNote,
   ReadRequest,
   WorkbookRequest,
   WorkbookText,
@@ -20,6 +22,7 @@ import type {
   SweepReport,
   SweepRequest,
 } from '../../workers/contract/selection.ts';
+import type { Repair, Series } from '../../workers/contract/series.ts';
 import type {
   IntegratedIntervals,
   IntervalsRequest,
@@ -51,6 +54,12 @@ export interface CoreClient {
     request: InversionRequest,
     progress: (fraction: number) => void,
   ): Promise<Result<InvertedInterval>>;
+  inspect(series: Series, notes: readonly ReadingNote[]): Promise<Result<ForensicReport>>;
+  repair(
+    raw: Series,
+    repairs: readonly Repair[],
+    columns: Readonly<Record<string, Float64Array>>,
+  ): Promise<Result<RepairedRecord>>;
   read(request: ReadRequest, progress: (fraction: number) => void): Promise<ReadAnswer>;
   join(request: JoinRequest): Promise<Result<JoinedFiles>>;
   /** Takes the bytes with it. */
@@ -116,6 +125,12 @@ export function createCoreClient(): CoreClient {
           key,
           async (remote) => await remote.invert(request, Comlink.proxy(progress)),
         ),
+      ),
+    inspect: (series, notes) =>
+      safe(modelling.run<Result<ForensicReport>>('inspect', async (remote) => await remote.inspect(series, notes))),
+    repair: (raw, repairs, columns) =>
+      safe(
+        modelling.run<Result<RepairedRecord>>('repair', async (remote) => await remote.repair(raw, repairs, columns)),
       ),
     read: (request, progress) =>
       reading

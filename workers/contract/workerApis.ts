@@ -1,10 +1,20 @@
 import type { Candidate, FitRequest } from './candidate.ts';
 import type { DiagnoseRequest, Judgement } from './diagnostics.ts';
 import type { Fit } from './fit.ts';
+import type { ForensicReport, RepairedRecord } from './forensics.ts';
 import type { Prediction, PredictRequest } from './prediction.ts';
-import type { JoinedFiles, JoinRequest, ReadAnswer, ReadRequest, WorkbookRequest, WorkbookText } from './reading.ts';
+import type {
+  JoinedFiles,
+  JoinRequest,
+  ReadAnswer,
+  ReadingNote,
+  ReadRequest,
+  WorkbookRequest,
+  WorkbookText,
+} from './reading.ts';
 import type { Result } from './result.ts';
 import type { ComparisonGroup, SweepPlan, SweepRange, SweepRanking, SweepReport, SweepRequest } from './selection.ts';
+import type { Repair, Series } from './series.ts';
 import type { IntegratedIntervals, IntervalsRequest, InversionRequest, InvertedInterval } from './uncertainty.ts';
 import type { Shape, ShapeRequest } from './shape.ts';
 
@@ -28,6 +38,14 @@ export interface ModellingApi extends Readiness {
   sweep(request: SweepRequest, report?: (news: SweepReport) => void): Result<null>;
   /** The standing of a sweep's fits. */
   rankSweep(fits: readonly Fit[]): Result<SweepRanking>;
+  /** What the logger did to a record; `notes` are those from reading its file. */
+  inspect(series: Series, notes?: readonly ReadingNote[]): Result<ForensicReport>;
+  /** Replays repairs from the raw record; `columns` stand on the same places and follow a regrid. */
+  repair(
+    raw: Series,
+    repairs: readonly Repair[],
+    columns?: Readonly<Record<string, Float64Array>>,
+  ): Result<RepairedRecord>;
   /** Intervals that hold where an estimate ± 2 standard errors does not. */
   intervals(request: IntervalsRequest): Result<IntegratedIntervals>;
   /** The same for one parameter by simulation. `progress` is a Comlink proxy, called with 0…1. */

@@ -4,6 +4,8 @@ import type { Result } from '../contract/result.ts';
 import type { ModellingApi } from '../contract/workerApis.ts';
 import { fitCandidate } from '../estimation/fitCandidate.ts';
 import { describeShape } from '../identification/describeShape.ts';
+import { repairRecord } from '../forensics/applyRepairs.ts';
+import { inspectRecord } from '../forensics/inspectRecord.ts';
 import { predictRecord } from '../prediction/predictRecord.ts';
 import { comparisonGroups } from '../selection/comparisonGroups.ts';
 import { integratedIntervals } from '../uncertainty/integratedIntervals.ts';
@@ -31,6 +33,9 @@ export const modellingApi: ModellingApi = {
     }),
   rankSweep: (fits) => guarded({}, () => ({ ok: true, value: rankSweep(fits) })),
   shape: (request) => guarded(request, describeShape),
+  inspect: (series, notes) => guarded({ values: series.values }, () => inspectRecord(series, notes)),
+  repair: (raw, repairs, columns = {}) =>
+    guarded({ values: raw.values, columns }, () => repairRecord(raw, repairs, columns)),
   compare: (fits) => guarded({}, () => ({ ok: true, value: comparisonGroups(fits) })),
 };
 

@@ -36,7 +36,7 @@ export function findFrozen(values: Float64Array, resolution: number): Finding | 
     count: frozen.length,
     places: frozen,
     numbers: {
-      longest: Math.max(...lengths),
+      longest: lengths.reduce((a, b) => Math.max(a, b), 0),
       least,
       readings: frozen.reduce((sum, { from, to }) => sum + to - from, 0),
     },

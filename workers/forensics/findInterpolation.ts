@@ -74,7 +74,7 @@ export function findInterpolation(values: Float64Array, resolution: number): Int
   const places = all.filter(({ from, to }) => to - from >= least);
   if (places.length === 0) return { finding: null, coarse: false };
   const readings = places.reduce((sum, { from, to }) => sum + to - from, 0);
-  const longest = Math.max(...places.map(({ from, to }) => to - from));
+  const longest = places.reduce((most, { from, to }) => Math.max(most, to - from), 0);
   return {
     coarse: false,
     finding: {

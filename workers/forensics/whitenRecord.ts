@@ -1,5 +1,6 @@
 import { autocorrelation } from '../identification/autocorrelation.ts';
 import { levinson } from '../numeric/levinson.ts';
+import { sortedQuantile } from '../numeric/sortedQuantile.ts';
 import { medianOf } from './medianOf.ts';
 import { robustScale } from './robustScale.ts';
 
@@ -10,7 +11,7 @@ export interface Whitened {
   readonly mean: number;
   /** e_t, NaN where the reading or one of those it leans on is missing. */
   readonly innovations: Float64Array;
-  /** Robust standard deviation of the innovations. */
+  /** Robust standard deviation of the innovations: by their median or by their 95th percentile, whichever is larger. */
   readonly scale: number;
   readonly count: number;
 }
@@ -27,7 +28,8 @@ const REACH = 3;
  *
  * Method: readings far from the median of the seven around them are left out; Yule–Walker equations on correlations of the pairs
  * that remain (Parzen 1963, Sankhyā A 25, 383–392); order up to min(24, 10 log₁₀ n, n/10) by Akaike's criterion; innovations of the
- * whole record; scale by the median absolute deviation. Gaps shorten the order until half of the readings have innovations.
+ * whole record; their scale by the median absolute deviation, or by the 95th percentile of their sizes where that says more (a peaked
+ * law, or coarse rounding that makes most of them equal). Gaps shorten the order until half of the readings have innovations.
  *
  * @param values gaps as NaN
  * @returns null where fewer than 40 innovations can be had or the readings do not vary
@@ -48,7 +50,7 @@ export function whitenRecord(values: Float64Array): Whitened | null {
   const innovations = innovationsBy(values, coefficients, mean);
   let count = 0;
   for (const e of innovations) if (!Number.isNaN(e)) count++;
-  const scale = robustScale(innovations);
+  const scale = scaleOf(innovations);
   return count < NEEDED || !(scale > 0) ? null : { coefficients, mean, innovations, scale, count };
 }
 
@@ -62,6 +64,17 @@ export function innovationsBy(values: Float64Array, coefficients: Float64Array, 
     innovations[t] = e;
   }
   return innovations;
+}
+
+/** Φ⁻¹(0.975). */
+const CENTRAL_95 = 1.959963984540054;
+
+function scaleOf(innovations: Float64Array): number {
+  const sizes = innovations
+    .filter((e) => !Number.isNaN(e))
+    .map(Math.abs)
+    .sort();
+  return Math.max(robustScale(innovations), sortedQuantile(sizes, 0.95) / CENTRAL_95);
 }
 
 function withoutWild(values: Float64Array): Float64Array {

@@ -9,7 +9,7 @@ import type { History } from './history.ts';
 import type { Jobs } from './jobs.ts';
 import { joinPieces, loadFiles, type Loaded } from './loadFiles.ts';
 import type { Store } from '../store.ts';
-import { activeRecord, trouble, withNotice } from '../updates.ts';
+import { activeRecord, note, trouble, withNotice } from '../updates.ts';
 
 export interface Arrivals {
   readonly openFiles: (files: readonly File[]) => Promise<void>;
@@ -94,17 +94,27 @@ export function createArrivals(
     return { fileName, fileHash, text, settings, files, ...empty };
   };
 
-  const take = (arrival: Arrival, record: ReadRecord, example: boolean) => {
+  /** The record as the wanted one knew it, its repairs replayed; null where it is another one. */
+  const asWanted = async (raw: ReadRecord): Promise<ReadRecord | null> => {
     const waiting = wanted();
-    const same = waiting !== null && waiting.seriesHash === record.series.hash;
+    if (waiting === null) return null;
+    if (waiting.repairs.length === 0) return waiting.seriesHash === raw.series.hash ? raw : null;
+    const replayed = await client.repair(raw.series, waiting.repairs, raw.columns);
+    return replayed.ok && replayed.value.series.hash === waiting.seriesHash ? { ...raw, ...replayed.value } : null;
+  };
+
+  /** `known`: the record as the wanted one knew it, or null where it is another one. */
+  const take = (arrival: Arrival, raw: ReadRecord, known: ReadRecord | null, example: boolean) => {
+    const waiting = wanted();
+    const same = waiting !== null && known?.series.hash === waiting.seriesHash;
     // What the page opens with is where undo ends.
     if (waiting === null && !store.get().opening) history.remember();
     newest += 1;
     settled = null;
     store.set((state) => ({
       ...(same
-        ? filledRecord(state, waiting, arrival, record, example)
-        : replacedRecord(state, arrival, record, example)),
+        ? filledRecord(state, waiting, arrival, raw, known, example)
+        : replacedRecord(state, arrival, raw, example)),
       arrival: null,
       prediction: null,
     }));
@@ -113,6 +123,9 @@ export function createArrivals(
       store.set((state) =>
         withNotice(state, trouble({ code: 'recordMismatch', fileName: arrival.fileName, sameFile })),
       );
+      const lost = waiting.repairs.length;
+      const words = `The ${lost === 1 ? 'repair' : `${lost} repairs`} of the session were made to another record and are left out.`;
+      if (lost > 0) store.set((state) => withNotice(state, note(words)));
     }
     jobs.fitWaiting();
   };
@@ -145,14 +158,16 @@ export function createArrivals(
       const settings = matches === null ? loaded.settings : { ...loaded.settings, ...arrival.settings };
       const answer = await read({ ...arrival, ...loaded, settings }, DECODING);
       const now = store.get().arrival;
-      if (matches !== null && now !== null && answer?.record?.series.hash === matches.seriesHash)
-        take(now, answer.record, false);
+      if (matches === null || now === null || !answer?.record) return;
+      const known = await asWanted(answer.record);
+      if (known !== null && store.get().arrival === now) take(now, answer.record, known, false);
     },
     openRecordText: async (text, name, mode = 'look', example = false) => {
       const answer = await read(start(name, hashText(text), text));
       const now = store.get().arrival;
-      if (answer?.record && now !== null && (mode === 'take' || wanted()?.seriesHash === answer.record.series.hash))
-        take(now, answer.record, example);
+      if (!answer?.record || now === null) return;
+      const known = await asWanted(answer.record);
+      if (store.get().arrival === now && (mode === 'take' || known !== null)) take(now, answer.record, known, example);
     },
     changeDialect: async (settings) => {
       const { arrival } = store.get();
@@ -177,7 +192,15 @@ export function createArrivals(
     },
     acceptArrival: () => {
       const { arrival } = store.get();
-      if (arrival?.answer?.record && !arrival.reading) take(arrival, arrival.answer.record, false);
+      if (!arrival?.answer?.record || arrival.reading) return;
+      const { record } = arrival.answer;
+      // Only repairs take time; without them the record is there at once.
+      if ((wanted()?.repairs.length ?? 0) === 0)
+        take(arrival, record, wanted()?.seriesHash === record.series.hash ? record : null, false);
+      else
+        void asWanted(record).then((known) => {
+          if (store.get().arrival === arrival) take(arrival, record, known, false);
+        });
     },
     stopReading: () => {
       newest += 1;

@@ -3,17 +3,18 @@ import type { AppState, Arrival, RecordState } from '../appState.ts';
 import { startingCandidates } from '../startingCandidates.ts';
 import { activeRecord, freshId, withRecord } from '../updates.ts';
 
-/** The wanted record of a link with its readings: candidates as the link has them. */
+/** The wanted record of a link with its readings, raw and repaired: candidates as the link has them. */
 export function filledRecord(
   state: AppState,
   wanted: RecordState,
   arrival: Arrival,
+  raw: ReadRecord,
   record: ReadRecord,
   example: boolean,
 ): AppState {
   return withRecord(state, wanted.id, (one) => ({
     ...one,
-    source: { kind: 'loaded', fileName: arrival.fileName, text: arrival.text, record, example },
+    source: { kind: 'loaded', fileName: arrival.fileName, text: arrival.text, record, raw, example },
   }));
 }
 
@@ -33,7 +34,7 @@ export function replacedRecord(state: AppState, arrival: Arrival, record: ReadRe
     window: { from: 0, to: values.length },
     holdOut: null,
     rows: candidates.map((candidate) => ({ id: freshId('c'), candidate, progress: { kind: 'waiting' }, grey: null })),
-    source: { kind: 'loaded', fileName: arrival.fileName, text: arrival.text, record, example },
+    source: { kind: 'loaded', fileName: arrival.fileName, text: arrival.text, record, raw: record, example },
   };
   return {
     ...state,

@@ -7,6 +7,7 @@ import { createSweepJobs } from './sweepJobs.ts';
 import { createIntervalJobs } from './intervalJobs.ts';
 import { createJobs } from './jobs.ts';
 import { createLinks, type Links } from './links.ts';
+import { createRepairs } from './repairs.ts';
 import type { Platform } from './platform.ts';
 import { saveDossier } from './saveDossier.ts';
 import type { Store } from '../store.ts';
@@ -49,6 +50,7 @@ export function createActions(
     stopSweep: sweepJobs.stop,
     checkInterval: intervalJobs.check,
     stopCheck: intervalJobs.stopCheck,
+    ...createRepairs(store, client, jobs, history),
     changeView: (part) => store.set((state) => ({ ...state, view: { ...state.view, ...part } })),
     undo: () => {
       history.undo();

@@ -33,6 +33,8 @@ function directClient(hold: { fits: (() => void)[] | null }): CoreClient {
     predict: (_key, request) => Promise.resolve(modellingApi.predict(request)),
     shape: (_key, request) => Promise.resolve(modellingApi.shape(request)),
     compare: (_key, fits) => Promise.resolve(modellingApi.compare(fits)),
+    inspect: (series, notes) => Promise.resolve(modellingApi.inspect(series, notes)),
+    repair: (raw, repairs, columns) => Promise.resolve(modellingApi.repair(raw, repairs, columns)),
     workers: 1,
     planSweep: (_key, range, like, workers) => Promise.resolve(modellingApi.planSweep(range, like, workers)),
     sweep: (_key, request, report) => Promise.resolve(modellingApi.sweep(request, report)),
