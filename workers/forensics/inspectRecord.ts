@@ -44,7 +44,7 @@ const BY_INNOVATIONS: readonly FindingCode[] = ['quantised', 'outlier', 'levelSt
  * @returns findings in that order, and what could not be looked for and why; `tooFewReadings` never: a short record has an empty
  *   report with everything untested
  */
-export function inspectRecord(series: Series, notes: readonly ReadingNote[] = []): Result<ForensicReport, Failure> {
+export function inspectRecord(series: Series, notes: readonly ReadingNote[] = []): Result<ForensicReport> {
   const { values, axis, hash } = series;
   const index = values.findIndex((value) => Math.abs(value) === Infinity);
   if (index >= 0) return { ok: false, failure: { code: 'notFinite', what: 'values', index } };
@@ -56,7 +56,7 @@ export function inspectRecord(series: Series, notes: readonly ReadingNote[] = []
     findings.push(finding);
     if (setAside) blank(rest, finding.places);
   };
-  const report = (resolution: number, innovationScale: number | null): Result<ForensicReport, Failure> => ({
+  const report = (resolution: number, innovationScale: number | null): Result<ForensicReport> => ({
     ok: true,
     value: { seriesHash: hash, findings, untested, resolution, innovationScale },
   });
