@@ -10,6 +10,7 @@ import { PredictStation } from './panels/predict/PredictStation.tsx';
 import { EmptySheet } from './panels/record/EmptySheet.tsx';
 import { Masthead } from './panels/record/Masthead.tsx';
 import { RecordPanel } from './panels/record/RecordPanel.tsx';
+import { ShapePanel } from './panels/shape/ShapePanel.tsx';
 import { activeRecord } from './state/selectors.ts';
 import { useActions, useAppState } from './state/useApp.ts';
 
@@ -74,6 +75,7 @@ export function App() {
         ) : (
           <>
             <RecordPanel record={record} />
+            <ShapePanel record={record} />
             <div className="bench">
               <div className="left">
                 <CandidateTable record={record} />

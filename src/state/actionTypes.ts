@@ -1,8 +1,10 @@
-import type { Candidate } from '../../workers/contract/candidate.ts';
+import type { Candidate, Order, Transform } from '../../workers/contract/candidate.ts';
 import type { Dialect } from '../../workers/contract/dialect.ts';
 import type { View } from '../../workers/contract/envelope.ts';
 import type { SweepRange } from '../../workers/contract/selection.ts';
 import type { RepairChange } from '../../workers/contract/series.ts';
+import type { Result } from '../../workers/contract/result.ts';
+import type { Shape } from '../../workers/contract/shape.ts';
 
 /** Everything the page can ask for. Panels call these and nothing else; they never touch `workerClient`. */
 export interface Actions {
@@ -22,6 +24,10 @@ export interface Actions {
   readonly dismissArrival: () => void;
   readonly forgetRecord: () => void;
 
+  /** The shape of the active record before any model, for this differencing and transform; `cancelled` where a newer question replaced it. */
+  readonly describeShape: (order: Pick<Order, 'd' | 'D' | 's'>, transform: Transform) => Promise<Result<Shape>>;
+  /** Adds those that are not in the table yet, as one step to undo, and chooses the first of them. */
+  readonly addCandidates: (candidates: readonly Candidate[]) => void;
   readonly addCandidate: (candidate: Candidate) => void;
   readonly duplicateCandidate: (rowId: string) => void;
   readonly removeCandidate: (rowId: string) => void;

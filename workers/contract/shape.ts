@@ -129,7 +129,7 @@ export type Sureness = 'clear' | 'likely' | 'open';
 
 /**
  * One reason of the advice as data. Numbers by code:
- * `unitRoot`, `stationary`, `bothRejected`, `neitherRejected`: adf, adfCritical, kpss, kpssCritical; `varianceFalls`, `varianceRises`: d, before, after;
+ * `unitRoot`, `stationary`, `bothRejected`, `neitherRejected`: d, D (of the series tested), adf, adfCritical, kpss, kpssCritical; `varianceFalls`, `varianceRises`: d (after), before, after;
  * `overDifferenced`: d, lagOne; `tooFew`: readings; `noSeason`: none; `periodStands`: period, share, pValue; `lagSeason`: s, r;
  * `seasonPersists`, `seasonFixed`: s, r; `seasonTooLong`: period, most; `seasonNotWhole`: period; `spreadGrows`: slope, error, ratio;
  * `spreadEven`: slope, error; `levelsAlike`: ratio; `notPositive`: none; `lambda`: value, from, to; `white`: lags;

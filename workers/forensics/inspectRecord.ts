@@ -1,4 +1,3 @@
-import type { Failure } from '../contract/failures.ts';
 import type { Finding, FindingCode, ForensicReport, Untested } from '../contract/forensics.ts';
 import type { ReadingNote } from '../contract/reading.ts';
 import type { Result } from '../contract/result.ts';

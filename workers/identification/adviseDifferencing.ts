@@ -5,8 +5,10 @@ import { unitRootPair } from './unitRootPair.ts';
 
 /** Lag-one autocorrelation below which a difference was one too many: an MA root at 1 gives −½. */
 const TOO_MANY = -0.45;
-/** Where the tests do not agree: differencing must bring the variance below this share. */
+/** Where no test speaks: differencing must bring the variance below this share. */
 const CLEARLY_LESS = 0.6;
+/** Where the unit root is rejected too: a shifted level or an event is likelier, unless next to nothing of the variance is left. */
+const NEARLY_NOTHING = 0.1;
 
 export interface DifferencingAdvice {
   readonly d: number;
@@ -43,7 +45,7 @@ export function adviseDifferencing(
       return { d, sureness: 'open', reasons };
     }
     const falls = next.variance < here.variance;
-    reasons.push(outcomeReason(pair, d), {
+    reasons.push(outcomeReason(pair, d, D), {
       about: 'd',
       code: falls ? 'varianceFalls' : 'varianceRises',
       numbers: { d: d + 1, before: here.variance, after: next.variance },
@@ -66,12 +68,13 @@ function decide(pair: UnitRootPair, ratio: number): { more: boolean; sureness: S
     case 'unitRoot':
       return { more: ratio < 1, sureness: ratio < CLEARLY_LESS ? 'clear' : ratio < 1 ? 'likely' : 'open' };
     case 'neither':
+      return { more: ratio < NEARLY_NOTHING, sureness: 'open' };
     case 'open':
       return { more: ratio < CLEARLY_LESS, sureness: 'open' };
   }
 }
 
-function outcomeReason({ outcome, dickeyFuller, kpss }: UnitRootPair, d: number): AdviceReason {
+function outcomeReason({ outcome, dickeyFuller, kpss }: UnitRootPair, d: number, D: number): AdviceReason {
   const codes = {
     stationary: 'stationary',
     unitRoot: 'unitRoot',
@@ -83,6 +86,7 @@ function outcomeReason({ outcome, dickeyFuller, kpss }: UnitRootPair, d: number)
     code: codes[outcome],
     numbers: {
       d,
+      D,
       adf: dickeyFuller.statistic,
       adfCritical: dickeyFuller.critical[1],
       kpss: kpss.statistic,

@@ -7,6 +7,9 @@ import { partialAutocorrelation } from './partialAutocorrelation.ts';
 const DEVIATE = 2.8;
 /** On a long record everything is significant: a correlation below this is left out of a first try. */
 const NEGLIGIBLE = 0.03;
+/** How far one stray correlation may lie outside, in bands, and from which lag (counted from 0) on there may be one. */
+const FAR = 1.4;
+const STRAYS_FROM = 3;
 const MOST_LAGS = 12;
 const MOST_AR = 4;
 const MOST_MA = 3;
@@ -25,7 +28,7 @@ export interface OrderAdvice {
  *
  * Method: partial autocorrelations that end after lag p speak for an AR(p), autocorrelations that end after lag q for an MA(q), both decaying for a
  * mixture (Box & Jenkins, Time Series Analysis, §6.2.1–6.2.2). Ended means below 2.8 standard errors, 1/√n or Bartlett's, at all further lags up
- * to 12 (or short of the season); the shorter description is advised. The seasonal part has the sign of the autocorrelation at the season. First
+ * to 12 (or short of the season) but one stray beyond the third; the shorter description is advised. The seasonal part has the sign of the autocorrelation at the season. First
  * guesses only: the fits decide.
  *
  * @param differenced gaps as NaN; @param s season, 0: none; @param D seasonal differences already taken
@@ -37,14 +40,14 @@ export function adviseOrders(differenced: Float64Array, s: number, D: number): O
   const n = all.observed;
   const partials = partialAutocorrelation(r.slice(0, short));
   const white = Math.max(NEGLIGIBLE, DEVIATE / Math.sqrt(n));
-  const p = lastBeyond(partials, () => white);
+  const p = endOf(partials, () => white);
   let sum = 0;
   const bands = Array.from({ length: short }, (_, i) => {
     const band = Math.max(NEGLIGIBLE, DEVIATE * Math.sqrt((1 + 2 * sum) / n));
     sum += r[i]! ** 2;
     return band;
   });
-  const q = lastBeyond(r.subarray(0, short), (i) => bands[i]!);
+  const q = endOf(r.subarray(0, short), (i) => bands[i]!);
   const seasonal = seasonalPart(s > 0 ? r[s - 1]! : NaN, white, s, D);
   const { reason, pairs, sureness } = shortPart(p, q, white, short);
   const reasons = [reason, ...seasonal.reasons];
@@ -52,9 +55,15 @@ export function adviseOrders(differenced: Float64Array, s: number, D: number): O
   return { orders, sureness, reasons };
 }
 
-/** Last lag at which a correlation is outside its band; 0 for none. */
-function lastBeyond(correlations: Float64Array, band: (i: number) => number): number {
-  for (let i = correlations.length - 1; i >= 0; i--) if (Math.abs(correlations[i]!) > band(i)) return i + 1;
+/** Lag after which correlations have ended: at most one further one is outside its band, and that one not far. */
+function endOf(correlations: Float64Array, band: (i: number) => number): number {
+  let strays = 0;
+  for (let i = correlations.length - 1; i >= 0; i--) {
+    const size = Math.abs(correlations[i]!) / band(i);
+    if (!(size > 1)) continue;
+    if (size > FAR || strays > 0 || i < STRAYS_FROM) return i + 1;
+    strays++;
+  }
   return 0;
 }
 

@@ -9,6 +9,7 @@ import { createJobs } from './jobs.ts';
 import { createLinks, type Links } from './links.ts';
 import { createRepairs } from './repairs.ts';
 import type { Platform } from './platform.ts';
+import { createShapeActions } from './shapeActions.ts';
 import { saveDossier } from './saveDossier.ts';
 import type { Store } from '../store.ts';
 import { trouble, withNotice } from '../updates.ts';
@@ -51,6 +52,7 @@ export function createActions(
     checkInterval: intervalJobs.check,
     stopCheck: intervalJobs.stopCheck,
     ...createRepairs(store, client, jobs, history),
+    ...createShapeActions(store, client, jobs, history),
     changeView: (part) => store.set((state) => ({ ...state, view: { ...state.view, ...part } })),
     undo: () => {
       history.undo();

@@ -231,3 +231,30 @@ describe('a sweep', () => {
     expect(activeRows(store.get())).toHaveLength(before);
   });
 });
+
+describe('the shape of the record', () => {
+  test('is described for the differencing asked for, and what it advises is added as one step to undo', async () => {
+    const answer = await app.actions.describeShape({ d: 1, D: 0, s: 0 }, { kind: 'none' });
+    if (!answer.ok) throw new Error(answer.failure.code);
+    expect(answer.value.order).toEqual({ d: 1, D: 0, s: 0 });
+    const before = activeRows(store.get()).length;
+    app.actions.addCandidates([
+      plainCandidate({ p: 1 }, 'mean'),
+      plainCandidate({ p: 2 }, 'mean'),
+      plainCandidate({ p: 3 }, 'mean'),
+    ]);
+    // The first is among the starting candidates already.
+    expect(activeRows(store.get())).toHaveLength(before + 2);
+    expect(activeRows(store.get())[store.get().view.chosen!]!.candidate.order.p).toBe(2);
+    await until(store, allDone);
+    app.actions.undo();
+    expect(activeRows(store.get())).toHaveLength(before);
+  });
+
+  test('candidates that are all there change nothing and say so', () => {
+    const before = activeRows(store.get());
+    app.actions.addCandidates(before.map(({ candidate }) => candidate));
+    expect(activeRows(store.get())).toBe(before);
+    expect(store.get().notices.at(-1)!.text).toMatch(/already/);
+  });
+});
