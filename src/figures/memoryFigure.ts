@@ -41,7 +41,7 @@ export function memoryFigure(
         mode: 'markers',
         x: lags,
         y: partials,
-        marker: { symbol: 'diamond-open', size: 7, color: palette.accent, line: { width: 1.5 } },
+        marker: { symbol: 'diamond', size: 8, color: palette.ground, line: { width: 1.5, color: palette.accent } },
         hovertemplate: 'partial %{y:.3f}<extra></extra>',
       },
     ],

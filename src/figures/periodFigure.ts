@@ -43,7 +43,9 @@ export function periodFigure(
   const floor = Math.min(...Array.from(background).filter((value) => value > 0)) / 30;
   const top = Math.max(...ordinates);
   const bottom = Math.max(floor, top * 1e-9);
-  const strongest = periods.slice(0, 3);
+  const strongest = periods.slice(0, 3).sort((a, b) => a.period - b.period);
+  // Names of neighbours stand on different heights.
+  const close = (i: number) => i > 0 && Math.log(strongest[i]!.period / strongest[i - 1]!.period) < 0.25 * span;
   return {
     data: [
       {
@@ -96,17 +98,17 @@ export function periodFigure(
       }),
       yaxis: baseAxis(palette, {
         type: 'log',
-        range: [Math.log10(bottom), Math.log10(top) + 0.35],
+        range: [Math.log10(bottom), Math.log10(top) + 0.16 * Math.log10(top / bottom)],
         title: { text: 'periodogram', standoff: 4 },
         exponentformat: 'power',
         nticks: 4,
       }),
-      annotations: strongest.map((one) => ({
+      annotations: strongest.map((one, i) => ({
         x: Math.log10(one.period),
         y: Math.log10(ordinates[nearest(frequencies, one.frequency)]!),
         text: periodName(axis, one),
         showarrow: false,
-        yshift: 13,
+        yshift: close(i) && !close(i - 1) ? 28 : 13,
         font: { color: palette.accent },
       })),
     },

@@ -48,8 +48,8 @@ export function ShapeCharts({ shape, axis, unit, raw }: ShapeChartsProps) {
         {spectrum.ordinates.length > 0 && <Plot figure={periods} label="Periods" height={height} />}
         <p className="quiet small">
           {spectrum.periods.length === 0
-            ? 'No period stands out of its surroundings (shaded). '
-            : `${spectrum.periods.map((one) => `${periodName(axis, one)} (p ${formatPValue(one.pValue)})`).join(', ')}: out of the surroundings (shaded). `}
+            ? 'No period stands out of the surroundings (shaded). '
+            : `Out of the surroundings (shaded): ${spectrum.periods.map((one) => `${periodName(axis, one)} (p ${formatPValue(one.pValue)})`).join(', ')}. `}
           Fisher’s g against independent readings {formatNumber(spectrum.fisher.statistic, 2)}, p{' '}
           {formatPValue(spectrum.fisher.pValue)}.
           {spectrum.averaged > 1 ? ` Of means of ${spectrum.averaged} readings.` : ''}
