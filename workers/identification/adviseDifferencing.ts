@@ -7,6 +7,8 @@ import { unitRootPair } from './unitRootPair.ts';
 const TOO_MANY = -0.45;
 /** Where no test speaks: differencing must bring the variance below this share. */
 const CLEARLY_LESS = 0.6;
+/** A root at 1 and one at 0.95 look alike to the tests: only a lag-one autocorrelation above some 0.975 makes a difference a clear matter. */
+const WANDERS = 0.05;
 /** Where the unit root is rejected too: a shifted level or an event is likelier, unless next to nothing of the variance is left. */
 const NEARLY_NOTHING = 0.1;
 
@@ -66,7 +68,7 @@ function decide(pair: UnitRootPair, ratio: number): { more: boolean; sureness: S
     case 'stationary':
       return { more: false, sureness: ratio > CLEARLY_LESS ? 'clear' : 'likely' };
     case 'unitRoot':
-      return { more: ratio < 1, sureness: ratio < CLEARLY_LESS ? 'clear' : ratio < 1 ? 'likely' : 'open' };
+      return { more: ratio < 1, sureness: ratio < WANDERS ? 'clear' : ratio < 1 ? 'likely' : 'open' };
     case 'neither':
       return { more: ratio < NEARLY_NOTHING, sureness: 'open' };
     case 'open':

@@ -1,7 +1,16 @@
 /** Ordinates on each side that make the surroundings of one, as a share of its place, and at least and at most this many. */
 const SHARE = 0.25;
-const LEAST = 8;
+const LEAST = 12;
 const MOST = 200;
+
+/** Relative variance of the median of N exponentials times N: 1/ln² 2 (its asymptotic variance is 1/N, Cramér 1946, §28.5). */
+const MEDIAN_VARIANCE = 1 / Math.LN2 ** 2;
+
+/** Expectation of each ordinate, and how well it is known: as well as the mean of `ordinates` exponentials. */
+export interface SpectralBackground {
+  readonly expected: Float64Array;
+  readonly ordinates: Float64Array;
+}
 
 /**
  * What the surroundings of each periodogram ordinate would give without a period: its expectation under a smooth spectrum.
@@ -9,14 +18,14 @@ const MOST = 200;
  * Method: the ordinates are first flattened by the spectrum of the first-order autoregression with their own lag-one autocorrelation (which Σ I cos ω gives), so that
  * a steep spectrum has no slope left within a window; the background is the median of the flattened ordinates within w places on either side, divided
  * by ln 2, the median of a standard exponential, times the autoregression's spectrum. A line is a few ordinates, which a median does not see. The
- * window is 0.25 k at place k, between 8 and 200; beyond the ends the spectrum is continued by reflection, as it is even. Our own
+ * window is 0.25 k at place k, between 12 and 200; beyond the ends the spectrum is continued by reflection, as it is even. Our own
  * combination of known steps; common practice for lines on a coloured background.
  *
  * @param ordinates I(k/n), k = 1…m
- * @returns length m; expectation of each ordinate
- * @example ordinates all equal to c: c/ln 2
+ * @returns arrays of length m
+ * @example ordinates all equal to c: expectation c/ln 2
  */
-export function spectralBackground(ordinates: Float64Array): Float64Array {
+export function spectralBackground(ordinates: Float64Array): SpectralBackground {
   const m = ordinates.length;
   let total = 0;
   let cosine = 0;
@@ -42,7 +51,14 @@ export function spectralBackground(ordinates: Float64Array): Float64Array {
     from = to;
     before = after;
   }
-  return result.map((value, i) => value / Math.LN2 / inverse[i]!);
+  return {
+    expected: result.map((value, i) => value / Math.LN2 / inverse[i]!),
+    // Reflected ordinates count once.
+    ordinates: result.map((_, i) => {
+      const width = widthAt(i);
+      return (Math.min(m - 1, i + width) - Math.max(0, i - width) + 1) / MEDIAN_VARIANCE;
+    }),
+  };
 }
 
 function widthAt(place: number): number {

@@ -4,7 +4,7 @@ import { brentMinimise } from '../numeric/brentMinimise.ts';
 import { calendarPeriods } from './calendarPeriods.ts';
 import { fisherG } from './fisherG.ts';
 import { periodogram } from './periodogram.ts';
-import { spectralBackground } from './spectralBackground.ts';
+import { spectralBackground, type SpectralBackground } from './spectralBackground.ts';
 
 const MOST_PERIODS = 6;
 /** Probability below which a peak is named. */
@@ -16,9 +16,9 @@ const DRAWN = 1200;
 /**
  * Periodogram with the periods that stand out of it.
  *
- * Method: each ordinate over what its surroundings would give (`spectralBackground`); without a period that ratio is a standard exponential in large
- * samples (Brockwell & Davis, Time Series: Theory and Methods, 2nd ed., §10.3), so that the largest of m exceeds x with probability
- * 1 − (1 − e^{−x})^m. Peaks are taken one by one, largest first; an ordinate within two Fourier spacings of a larger one belongs to it. The
+ * Method: each ordinate over what its surroundings would give (`spectralBackground`); without a period an ordinate is exponential in large samples
+ * (Brockwell & Davis, Time Series: Theory and Methods, 2nd ed., §10.3), and its ratio to a background known as well as a mean of ν ordinates exceeds
+ * x with probability u = (1 + x/ν)^{−ν}, the tail of F with 2 and 2ν degrees of freedom; the largest of m does with 1 − (1 − u)^m. Peaks are taken one by one, the least likely first; an ordinate within two Fourier spacings of a larger one belongs to it. The
  * frequency is refined at the maximum of the periodogram between its neighbours. A calendar period, or one of its first six harmonics, gives its
  * name where it lies within half a Fourier spacing. Fisher's g of the largest ordinate is against independent readings, with no memory.
  *
@@ -35,14 +35,15 @@ export function strongestPeriods(values: Float64Array, axis: Axis, step = 1): Sh
   const none = { frequencies: new Float64Array(0), ordinates: new Float64Array(0), background: new Float64Array(0) };
   if (n < 16 || !(total > 0))
     return { ...none, periods: [], averaged: step, fisher: { statistic: NaN, pValue: NaN, ordinates: 0 } };
-  const background = spectralBackground(ordinates);
+  const known = spectralBackground(ordinates);
+  const background = known.expected;
   let largest = 0;
   let sum = 0;
   for (let i = 0; i < inside; i++) {
     sum += ordinates[i]!;
     if (ordinates[i]! > largest) largest = ordinates[i]!;
   }
-  const periods = peaks(ordinates, background).map((at): NamedPeriod => {
+  const periods = peaks(ordinates, known).map((at): NamedPeriod => {
     const contrast = ordinates[at]! / background[at]!;
     const frequency = refined(values, frequencies[at]!);
     const period = step / frequency;
@@ -52,7 +53,7 @@ export function strongestPeriods(values: Float64Array, axis: Axis, step = 1): Sh
       calendar: named(axis, period, n * step),
       share: [at - 1, at, at + 1].reduce((part, i) => part + (ordinates[i] ?? 0), 0) / total,
       contrast,
-      pValue: -Math.expm1(m * Math.log1p(-Math.exp(-contrast))),
+      pValue: -Math.expm1(m * Math.log1p(-chance(contrast, known.ordinates[at]!))),
     };
   });
   const statistic = largest / sum;
@@ -64,15 +65,23 @@ export function strongestPeriods(values: Float64Array, axis: Axis, step = 1): Sh
   };
 }
 
-/** Places of the peaks, most contrast first. */
-function peaks(ordinates: Float64Array, background: Float64Array): number[] {
+/** P(ratio > x) for an exponential over a background known as well as a mean of ν. */
+function chance(x: number, ordinates: number): number {
+  return Math.exp(-ordinates * Math.log1p(x / ordinates));
+}
+
+/** Places of the peaks, least likely first. */
+function peaks(ordinates: Float64Array, known: SpectralBackground): number[] {
   const m = ordinates.length;
-  const limit = -Math.log(-Math.expm1(Math.log1p(-NAMED) / m));
-  const standing: number[] = [];
-  for (let i = FEWEST_CYCLES - 1; i < m; i++) if (ordinates[i]! > limit * background[i]!) standing.push(i);
-  standing.sort((a, b) => ordinates[b]! / background[b]! - ordinates[a]! / background[a]!);
+  const limit = -Math.expm1(Math.log1p(-NAMED) / m);
+  const standing: { at: number; p: number }[] = [];
+  for (let at = FEWEST_CYCLES - 1; at < m; at++) {
+    const p = chance(ordinates[at]! / known.expected[at]!, known.ordinates[at]!);
+    if (p < limit) standing.push({ at, p });
+  }
+  standing.sort((a, b) => a.p - b.p);
   const kept: number[] = [];
-  for (const at of standing) {
+  for (const { at } of standing) {
     if (kept.length >= MOST_PERIODS) break;
     if (kept.every((other) => Math.abs(other - at) > 2)) kept.push(at);
   }
