@@ -20,6 +20,8 @@ export interface RecordParts {
   readonly events?: readonly Regressor[];
   /** The reading spoken of. */
   readonly picked?: number | null;
+  /** The readings as they were read, on the same places: those made gaps since are drawn faintly. */
+  readonly raw?: Series;
 }
 
 /**
@@ -27,13 +29,14 @@ export interface RecordParts {
  * candidate, or nothing where none is chosen.
  */
 export function recordFigure(parts: RecordParts, palette: Palette): Figure {
-  const { series, name, evidence, prediction, events = [], picked = null } = parts;
+  const { series, name, evidence, prediction, raw, events = [], picked = null } = parts;
   const { axis, values, unit } = series;
   const withInnovations = evidence !== null;
   const x = (index: readonly number[]) => index.map((t) => chartTime(axis, t));
   const line = thinned(values);
   const data: Trace[] = [
     ...hatched(values, axis, palette),
+    ...(raw === undefined ? [] : setAside(raw, values, palette)),
     {
       type: 'scatter',
       mode: 'lines',
@@ -150,6 +153,30 @@ function hatched(values: Float64Array, axis: Axis, palette: Palette): Trace[] {
         pattern: { shape: '/', size: 6, solidity: 0.25, fgcolor: palette.faint, bgcolor: palette.band },
       },
       hoverinfo: 'skip',
+    },
+  ];
+}
+
+/** Readings that were made gaps, as far as they lie near the others: a code of −999 would flatten the record. */
+function setAside(raw: Series, values: Float64Array, palette: Palette): Trace[] {
+  let [low, high] = [Infinity, -Infinity];
+  for (const value of values) if (!Number.isNaN(value)) [low, high] = [Math.min(low, value), Math.max(high, value)];
+  const margin = (high - low) / 2;
+  const gone = raw.values.map((value, t) =>
+    Number.isNaN(values[t]!) && value >= low - margin && value <= high + margin ? value : NaN,
+  );
+  if (gone.every((value) => Number.isNaN(value))) return [];
+  const { index, value } = thinned(gone);
+  return [
+    {
+      type: 'scatter',
+      mode: 'lines+markers',
+      x: index.map((t) => chartTime(raw.axis, t)),
+      y: value,
+      line: { color: palette.faint, width: 0.7 },
+      marker: { size: 3, color: palette.faint },
+      connectgaps: false,
+      hovertemplate: 'made a gap: %{y}<extra></extra>',
     },
   ];
 }

@@ -71,3 +71,54 @@ export function formatReadings(axis: Axis, readings: number): string {
 export function formatSpan(axis: Axis, { from, to }: Span): string {
   return `${timeAt(axis, from)} to ${timeAt(axis, to - 1)}`;
 }
+
+/** The place nearest to a point of a chart's time axis; it may lie outside the record. */
+export function placeAtChart(axis: Axis, x: number): number {
+  if (axis.kind === 'index') return Math.round((x - axis.start) / axis.step);
+  if (axis.kind === 'seconds') return Math.round((x / 1000 - axis.start) / axis.step);
+  const date = new Date(x);
+  const months = 12 * (date.getUTCFullYear() - 1970) + date.getUTCMonth() + (date.getUTCDate() - 1) / 31;
+  return Math.round((months - axis.start) / axis.step);
+}
+
+/** A time that `placeOfTime` reads back: the time itself, or the count of the reading where times are finer than seconds. */
+export function typedTime(axis: Axis, place: number): string {
+  return axis.kind === 'seconds' && !Number.isInteger(axis.step) ? `reading ${place + 1}` : timeAt(axis, place);
+}
+
+/**
+ * The place of a typed time: a date with or without a time of day, a month, a year, or the number of a reading.
+ *
+ * @returns the place of the reading at that time, or of the first one after it; null where the text is no time
+ * @example on a record without time "12" is the reading numbered 12; "reading 12" is the twelfth of a record with time
+ */
+export function placeOfTime(axis: Axis, text: string): number | null {
+  const counting = /^reading\s+(\d+)$/iu.exec(text.trim());
+  if (counting !== null && axis.kind !== 'index') return Number(counting[1]) - 1;
+  const bare = text.trim().replace(/^reading\s+/iu, '');
+  if (axis.kind === 'index') {
+    const number = Number(bare.replace(/[\u2009\s]/gu, ''));
+    return bare === '' || !Number.isFinite(number) ? null : Math.ceil((number - axis.start) / axis.step - 1e-9);
+  }
+  const match = /^(\d{4})(?:-(\d{1,2}))?(?:-(\d{1,2}))?(?:[T ](\d{1,2}):(\d{2})(?::(\d{2}(?:\.\d+)?))?)?$/u.exec(bare);
+  if (match === null) return null;
+  const [year, month, day, hour, minute, second] = match
+    .slice(1)
+    .map((part) => (part === undefined ? 0 : Number(part)));
+  if (axis.kind === 'months') return Math.ceil((12 * (year! - 1970) + (month || 1) - 1 - axis.start) / axis.step);
+  const clock = Date.UTC(year!, (month || 1) - 1, day || 1, hour, minute) / 1000 + second!;
+  // With a zone the clock shows another time than UTC: what it shows there is compared, twice for a change of the clock.
+  let place = Math.ceil((clock - axis.start) / axis.step - 1e-9);
+  if (axis.zone === null) return place;
+  for (let round = 0; round < 2; round += 1) {
+    const shown =
+      Date.parse(
+        `${timeAt({ ...axis, kind: 'seconds' }, place)
+          .replace(' ', 'T')
+          .padEnd(16, 'T00:00')}Z`,
+      ) / 1000;
+    if (Number.isNaN(shown)) return place;
+    place += Math.ceil((clock - shown) / axis.step - 1e-9);
+  }
+  return place;
+}

@@ -20,6 +20,11 @@ export function withRow(record: RecordState, rowId: string, change: (row: Row) =
   return { ...record, rows: record.rows.map((row) => (row.id === rowId ? change(row) : row)) };
 }
 
+/** Fitting, or fitted and still being searched and checked. */
+export function isUnderWay({ progress }: Row): boolean {
+  return progress.kind === 'fitting' || (progress.kind === 'fitted' && progress.judgement === null);
+}
+
 /** A row that waits for its result again, keeping the old one in grey. */
 export function waitingRow(row: Row): Row {
   const { progress, grey } = row;

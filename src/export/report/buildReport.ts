@@ -14,6 +14,7 @@ import {
   transformName,
 } from '../../format/notation.ts';
 import { counted, formatFixed, formatNumber, formatWithUncertainty } from '../../format/numbers.ts';
+import { axesOf, changeText } from '../../format/repairText.ts';
 import { standingSentence, verdictSentence } from '../../format/verdictText.ts';
 import { warningText } from '../../format/warningText.ts';
 import { failureText } from '../../format/failureText.ts';
@@ -74,11 +75,12 @@ function recordSection(input: ReportInput): Section {
             `${counted(series.values.length - gaps, 'reading')}, ${formatInterval(series.axis)}; ${gaps === 0 ? 'no gaps' : `${counted(gaps, 'place')} without a reading, kept as gaps`}`,
           ],
           ['Fit window', formatSpan(series.axis, fit.window)],
-          ['Repairs', repairs.length === 0 ? 'none' : counted(repairs.length, 'repair')],
+          ...(repairs.length === 0 ? [['Repairs', 'none'] as const] : rawFacts(input)),
           ...readingFacts(input.dialect),
         ],
       },
       ...(notes.length === 0 ? [] : [{ kind: 'list' as const, items: notes.map(noteSentence) }]),
+      ...repairBlocks(input),
       {
         kind: 'figure',
         name: 'record',
@@ -86,6 +88,24 @@ function recordSection(input: ReportInput): Section {
       },
     ],
   };
+}
+
+function rawFacts({ repairs, raw }: ReportInput): (readonly [string, string])[] {
+  return [
+    ['Repairs', `${counted(repairs.length, 'repair')}, listed below; the file is unchanged`],
+    ...(raw === undefined ? [] : [['Fingerprint before repairs', raw.series.hash] as const]),
+  ];
+}
+
+/** Every repair in the order it is replayed, with its reason and when it was made. */
+function repairBlocks({ repairs, raw, record }: ReportInput): Block[] {
+  if (repairs.length === 0) return [];
+  const axes = axesOf((raw ?? record).series.axis, repairs);
+  const items = repairs.map((repair, index) => {
+    const why = repair.why === '' ? 'no reason given' : repair.why;
+    return `Repair ${index + 1}: ${changeText(repair, axes[index]!)}. Why: ${why} (${repair.at.slice(0, 16).replace('T', ' ')} UTC).`;
+  });
+  return [{ kind: 'list', items }];
 }
 
 function modelSection(input: ReportInput): Section {

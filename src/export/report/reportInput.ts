@@ -16,6 +16,8 @@ export interface ReportInput {
   readonly dialect: Dialect;
   readonly repairs: readonly Repair[];
   readonly record: ReadRecord;
+  /** The record as read from the file, before any repair. */
+  readonly raw?: ReadRecord;
   readonly fit: Fit;
   readonly judgement: Judgement;
   readonly prediction: Prediction | null;

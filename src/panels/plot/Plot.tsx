@@ -1,6 +1,7 @@
 import { useEffect, useRef } from 'react';
 import type { Figure } from '../../figures/figure.ts';
 import { enqueueDrawing } from './drawQueue.ts';
+import { MarkLayer } from './MarkLayer.tsx';
 
 interface PlotProps {
   readonly figure: Figure;
@@ -8,10 +9,12 @@ interface PlotProps {
   readonly height: number;
   /** Called with the index of the reading that is clicked. */
   readonly onPick?: (index: number) => void;
+  /** Given while a stretch is to be marked: a drag across the chart reports its ends on the time axis. */
+  readonly onMark?: ((from: number, to: number) => void) | undefined;
 }
 
 /** A chart. Its text alternative stands beside it; the drawing itself is hidden from readers of the screen. */
-export function Plot({ figure, label, height, onPick }: PlotProps) {
+export function Plot({ figure, label, height, onPick, onMark }: PlotProps) {
   const frame = useRef<HTMLDivElement>(null);
   const current = useRef(figure);
 
@@ -54,6 +57,7 @@ export function Plot({ figure, label, height, onPick }: PlotProps) {
   return (
     <figure className="plot" aria-label={label}>
       <div ref={frame} className="plot-frame" style={{ height }} aria-hidden="true" />
+      {onMark !== undefined && <MarkLayer frame={frame} onMark={onMark} />}
       <figcaption className="unseen">{figure.says}</figcaption>
     </figure>
   );

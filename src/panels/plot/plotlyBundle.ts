@@ -40,6 +40,29 @@ export function onClickedMark(element: Chart, call: (index: number) => void): vo
   });
 }
 
+/** Where the time axis of a drawn chart lies, in pixels from its left edge, and what it shows now; null before it is drawn. */
+export function timeAxis(element: HTMLElement): TimeAxis | null {
+  const axis = (element as { _fullLayout?: { xaxis?: DrawnAxis } })._fullLayout?.xaxis;
+  if (axis === undefined) return null;
+  const number = (value: number | string) =>
+    typeof value === 'number' ? value : Date.parse(`${value.replace(' ', 'T')}${value.includes(' ') ? 'Z' : ''}`);
+  return { left: axis._offset, width: axis._length, from: number(axis.range[0]), to: number(axis.range[1]) };
+}
+
+/** The part of a drawn axis that is used here. */
+interface DrawnAxis {
+  readonly _offset: number;
+  readonly _length: number;
+  readonly range: readonly [number | string, number | string];
+}
+
+export interface TimeAxis {
+  readonly left: number;
+  readonly width: number;
+  readonly from: number;
+  readonly to: number;
+}
+
 export function erase(element: HTMLElement): void {
   Plotly.purge(element);
 }

@@ -1,12 +1,13 @@
-import { useMemo } from 'react';
+import { useMemo, useState } from 'react';
 import { recordFigure } from '../../figures/recordFigure.ts';
 import { gapRuns } from '../../figures/gapRuns.ts';
-import { formatInterval, formatSpan } from '../../format/axisTime.ts';
+import { formatInterval, formatSpan, placeAtChart, typedTime } from '../../format/axisTime.ts';
 import { noteSentence } from '../../format/dialectText.ts';
 import { counted } from '../../format/numbers.ts';
 import type { RecordState } from '../../state/appState.ts';
 import { chosenRow, shownEvidence } from '../../state/selectors.ts';
 import { useActions, useAppState } from '../../state/useApp.ts';
+import { ForensicsPanel } from '../forensics/ForensicsPanel.tsx';
 import { Plot } from '../plot/Plot.tsx';
 import { PickedReading } from './PickedReading.tsx';
 import { usePalette } from '../plot/usePalette.ts';
@@ -19,9 +20,12 @@ export function RecordPanel({ record }: { readonly record: RecordState }) {
   const events = row?.candidate.regressors;
   const prediction = useAppState((state) => state.prediction);
   const palette = usePalette();
+  const [ends, setEnds] = useState<readonly [string, string]>(['', '']);
+  const [marking, setMarking] = useState(false);
   const { source } = record;
   const evidence = shownEvidence(row)?.judgement.evidence ?? null;
   const forecast = prediction?.rowId === row?.id ? (prediction?.prediction ?? null) : null;
+  const onlyGaps = record.repairs.every(({ kind }) => kind === 'gap' || kind === 'gaps');
   const figure = useMemo(
     () =>
       source.kind === 'loaded'
@@ -33,11 +37,12 @@ export function RecordPanel({ record }: { readonly record: RecordState }) {
               prediction: forecast,
               ...(events === undefined ? {} : { events }),
               picked,
+              ...(onlyGaps ? { raw: source.raw.series } : {}),
             },
             palette,
           )
         : null,
-    [source, evidence, forecast, events, picked, palette],
+    [source, evidence, forecast, events, picked, palette, onlyGaps],
   );
 
   if (source.kind === 'wanted' || figure === null)
@@ -53,6 +58,11 @@ export function RecordPanel({ record }: { readonly record: RecordState }) {
     );
 
   const { series, name, notes } = source.record;
+  const mark = (from: number, to: number) => {
+    const inside = (place: number) => Math.min(Math.max(place, 0), series.values.length - 1);
+    const place = (x: number) => typedTime(series.axis, inside(placeAtChart(series.axis, x)));
+    setEnds([place(from), place(to)]);
+  };
   const gaps = series.values.reduce((sum, value) => sum + (Number.isNaN(value) ? 1 : 0), 0);
   return (
     <section className="record" aria-labelledby="record-name" id="panel-record">
@@ -85,8 +95,10 @@ export function RecordPanel({ record }: { readonly record: RecordState }) {
         label={evidence === null ? 'Record' : 'Record and innovations'}
         height={280}
         onPick={actions.pick}
+        onMark={marking ? mark : undefined}
       />
       <PickedReading series={series} />
+      <ForensicsPanel record={record} ends={ends} onEnds={setEnds} marking={marking} onMarking={setMarking} />
     </section>
   );
 }

@@ -1,5 +1,6 @@
 import type { AppState, RecordState } from '../appState.ts';
 import type { Store } from '../store.ts';
+import { isUnderWay, waitingRow } from '../updates.ts';
 
 interface Snapshot {
   readonly records: readonly RecordState[];
@@ -7,6 +8,13 @@ interface Snapshot {
 }
 
 const MOST = 200;
+
+/** Rows that were under way when they were remembered have lost their jobs: they wait again. */
+function settled(record: RecordState): RecordState {
+  return record.rows.some(isUnderWay)
+    ? { ...record, rows: record.rows.map((row) => (isUnderWay(row) ? waitingRow(row) : row)) }
+    : record;
+}
 
 /** Undo and redo over records, not over the view. */
 export interface History {
@@ -26,7 +34,7 @@ export function createHistory(store: Store): History {
     const snapshot = from.pop();
     if (snapshot === undefined) return;
     to.push(here(store.get()));
-    store.set((state) => ({ ...state, ...snapshot, ...depths() }));
+    store.set((state) => ({ ...state, ...snapshot, records: snapshot.records.map(settled), ...depths() }));
   };
   return {
     remember: () => {

@@ -5,7 +5,7 @@ import type { AppState, RecordState, Row } from '../appState.ts';
 import { shownFit } from '../selectors.ts';
 import { candidateKey } from '../startingCandidates.ts';
 import type { Store } from '../store.ts';
-import { activeRecord, waitingRow, withProgress, withRecord, withRow } from '../updates.ts';
+import { activeRecord, isUnderWay, waitingRow, withProgress, withRecord, withRow } from '../updates.ts';
 
 /** Seed of every search, carried in each fit. */
 const seed = 1;
@@ -181,11 +181,6 @@ function withChoice(state: AppState, { rowIds, groups }: AppState['comparison'])
   if (ranked.some((id) => rankOf(id) < 0)) return state.view;
   const best = ranked.reduce((one, other) => (rankOf(other) < rankOf(one) ? other : one), ranked[0]);
   return { ...state.view, chosen: all.findIndex(({ id }) => id === best) };
-}
-
-/** Fitting, or fitted and still being searched and checked. */
-function isUnderWay({ progress }: Row): boolean {
-  return progress.kind === 'fitting' || (progress.kind === 'fitted' && progress.judgement === null);
 }
 
 function fitsOf(record: RecordState): Fit[] {

@@ -24,6 +24,7 @@ export async function saveDossier(store: Store, platform: Platform): Promise<voi
       dialect: record.dialect,
       repairs: record.repairs,
       record: source.record,
+      raw: source.raw,
       fit,
       judgement,
       prediction,
