@@ -81,6 +81,9 @@ export function placeAtChart(axis: Axis, x: number): number {
   return Math.round((months - axis.start) / axis.step);
 }
 
+/** The whole number at or above a quotient that may be a rounding error too large; never −0. */
+const upTo = (quotient: number): number => Math.ceil(quotient - 1e-9) + 0;
+
 /** A time that `placeOfTime` reads back: the time itself, or the count of the reading where times are finer than seconds. */
 export function typedTime(axis: Axis, place: number): string {
   return axis.kind === 'seconds' && !Number.isInteger(axis.step) ? `reading ${place + 1}` : timeAt(axis, place);
@@ -98,17 +101,17 @@ export function placeOfTime(axis: Axis, text: string): number | null {
   const bare = text.trim().replace(/^reading\s+/iu, '');
   if (axis.kind === 'index') {
     const number = Number(bare.replace(/[\u2009\s]/gu, ''));
-    return bare === '' || !Number.isFinite(number) ? null : Math.ceil((number - axis.start) / axis.step - 1e-9);
+    return bare === '' || !Number.isFinite(number) ? null : upTo((number - axis.start) / axis.step);
   }
   const match = /^(\d{4})(?:-(\d{1,2}))?(?:-(\d{1,2}))?(?:[T ](\d{1,2}):(\d{2})(?::(\d{2}(?:\.\d+)?))?)?$/u.exec(bare);
   if (match === null) return null;
   const [year, month, day, hour, minute, second] = match
     .slice(1)
     .map((part) => (part === undefined ? 0 : Number(part)));
-  if (axis.kind === 'months') return Math.ceil((12 * (year! - 1970) + (month || 1) - 1 - axis.start) / axis.step);
+  if (axis.kind === 'months') return upTo((12 * (year! - 1970) + (month || 1) - 1 - axis.start) / axis.step);
   const clock = Date.UTC(year!, (month || 1) - 1, day || 1, hour, minute) / 1000 + second!;
   // With a zone the clock shows another time than UTC: what it shows there is compared, twice for a change of the clock.
-  let place = Math.ceil((clock - axis.start) / axis.step - 1e-9);
+  let place = upTo((clock - axis.start) / axis.step);
   if (axis.zone === null) return place;
   for (let round = 0; round < 2; round += 1) {
     const shown =
@@ -118,7 +121,7 @@ export function placeOfTime(axis: Axis, text: string): number | null {
           .padEnd(16, 'T00:00')}Z`,
       ) / 1000;
     if (Number.isNaN(shown)) return place;
-    place += Math.ceil((clock - shown) / axis.step - 1e-9);
+    place += upTo((clock - shown) / axis.step);
   }
   return place;
 }

@@ -1,7 +1,7 @@
 import type { RepairFailure } from '../../workers/contract/failures.ts';
 import type { Axis, Repair, RepairChange, Span } from '../../workers/contract/series.ts';
 import { formatInterval, timeAt } from './axisTime.ts';
-import { counted, formatNumber } from './numbers.ts';
+import { counted, formatReading } from './numbers.ts';
 
 const rules = {
   nearest: 'the reading nearest to each place',
@@ -44,8 +44,8 @@ export function changeText(change: RepairChange, axis: Axis): string {
     }
     case 'scale': {
       const { factor, offset, unit } = change;
-      const times = factor === 1 ? 'reading' : `${formatNumber(factor, 8)} · reading`;
-      const plus = offset === 0 ? '' : ` ${offset < 0 ? '−' : '+'} ${formatNumber(Math.abs(offset), 8)}`;
+      const times = factor === 1 ? 'reading' : `${formatReading(factor)} · reading`;
+      const plus = offset === 0 ? '' : ` ${offset < 0 ? '−' : '+'} ${formatReading(Math.abs(offset))}`;
       if (factor === 1 && offset === 0) return unit === '' ? 'unit taken away' : `unit set to ${unit}`;
       return `readings rescaled: ${times}${plus}${unit === '' ? '' : `, in ${unit}`}`;
     }
