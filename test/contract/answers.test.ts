@@ -43,6 +43,21 @@ describe('answers of the modelling worker', () => {
     crosses(answer);
   });
 
+  it('a report, a repaired record and a refusal cross', () => {
+    const axis = { kind: 'index', start: 1, step: 1, zone: null } as const;
+    const series = { values, axis, unit: '', hash: '' };
+    const report = modellingApi.inspect(series);
+    expect(report.ok).toBe(true);
+    crosses(report);
+    const gap = { id: 'm', at: '', why: '', kind: 'gap', from: 3, to: 5 } as const;
+    const repaired = modellingApi.repair(series, [gap], { other: values });
+    expect(repaired.ok).toBe(true);
+    crosses(repaired);
+    const refused = modellingApi.repair(series, [{ ...gap, to: 5000 }]);
+    expect(refused.ok).toBe(false);
+    crosses(refused);
+  });
+
   it('a comparison and a failure cross', () => {
     crosses(modellingApi.compare([fit, fit]));
     const failed = modellingApi.fit({ values: values.subarray(0, 3), candidate, seed: 1 });

@@ -4,6 +4,7 @@ import type { DiagnoseRequest, Judgement } from '../../workers/contract/diagnost
 import type { Envelope } from '../../workers/contract/envelope.ts';
 import type { Failure } from '../../workers/contract/failures.ts';
 import type { Fit } from '../../workers/contract/fit.ts';
+import type { ForensicReport, RepairedRecord } from '../../workers/contract/forensics.ts';
 import type { Prediction, PredictRequest } from '../../workers/contract/prediction.ts';
 import type { ReadAnswer, ReadRequest } from '../../workers/contract/reading.ts';
 import type { ComparisonGroup } from '../../workers/contract/selection.ts';
@@ -45,6 +46,8 @@ describe('contracts', () => {
       readAnswer: Proof<ReadAnswer>;
       failure: Proof<Failure>;
       series: Proof<Series>;
+      forensicReport: Proof<ForensicReport>;
+      repairedRecord: Proof<RepairedRecord>;
       envelope: Proof<Envelope>;
     } = {
       candidate: true,
@@ -61,6 +64,8 @@ describe('contracts', () => {
       readAnswer: true,
       failure: true,
       series: true,
+      forensicReport: true,
+      repairedRecord: true,
       envelope: true,
     };
     expect(Object.values(proofs)).not.toContain(false);

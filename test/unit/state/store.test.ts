@@ -161,6 +161,93 @@ describe('a record and its candidates', () => {
   });
 });
 
+describe('repairs', () => {
+  const numbers = () =>
+    activeRows(store.get()).map(({ progress }) => (progress.kind === 'fitted' ? progress.fit.logLikelihood : null));
+  const record = () => store.get().records[0]!;
+  const source = () => {
+    const { source: own } = record();
+    if (own.kind !== 'loaded') throw new Error('no readings');
+    return own;
+  };
+
+  test('the report is made on arrival and again for the repaired record; fits are made again; undo gives back all', async () => {
+    await until(store, () => store.get().forensics !== null);
+    const before = { numbers: numbers(), hash: record().seriesHash, raw: source().raw.series.values.slice() };
+    expect(store.get().forensics!.seriesHash).toBe(before.hash);
+    await app.actions.repair({ kind: 'gap', from: 10, to: 13 }, 'test');
+    expect(record().repairs).toMatchObject([{ kind: 'gap', from: 10, to: 13, why: 'test' }]);
+    expect(source().record.series.values[11]).toBeNaN();
+    await until(store, () => allDone() && store.get().forensics?.seriesHash === record().seriesHash);
+    expect(numbers()).not.toEqual(before.numbers);
+    expect(
+      activeRows(store.get()).every(
+        ({ progress }) => progress.kind === 'fitted' && progress.fit.seriesHash === record().seriesHash,
+      ),
+    ).toBe(true);
+    expect(source().raw.series.values).toEqual(before.raw);
+    app.actions.undo();
+    expect(record().seriesHash).toBe(before.hash);
+    expect(numbers()).toEqual(before.numbers);
+    expect(source().record.series.values).toEqual(before.raw);
+  });
+
+  test('two repairs asked for at once are both made, in order; a refused one is a notice and changes nothing', async () => {
+    const scale = app.actions.repair({ kind: 'scale', factor: 0.3048, offset: 0, unit: 'm' }, 'feet to metres');
+    await Promise.all([scale, app.actions.repair({ kind: 'gap', from: 0, to: 2 }, '')]);
+    expect(record().repairs.map(({ kind }) => kind)).toEqual(['scale', 'gap']);
+    expect(source().record.series.unit).toBe('m');
+    const kept = record();
+    await app.actions.repair({ kind: 'gap', from: 90, to: 200 }, '');
+    expect(record()).toBe(kept);
+    expect(store.get().notices.at(-1)?.failure).toMatchObject({ code: 'repairRefused', reason: 'outside', place: 3 });
+    await app.actions.removeRepair(kept.repairs[0]!.id);
+    await app.actions.removeRepair(kept.repairs[1]!.id);
+    expect(source().record.series.hash).toBe(source().raw.series.hash);
+  });
+
+  test('a regrid takes window, hold-out and events along', async () => {
+    const [first] = activeRows(store.get());
+    app.actions.changeCandidate(first!.id, { regressors: [{ kind: 'step', at: 40 }] });
+    const yearly = source().record.series.axis;
+    await app.actions.repair({ kind: 'regrid', step: 2 * yearly.step, rule: 'binMean' }, '');
+    expect(record().window).toEqual({ from: 0, to: 49 });
+    expect(activeRows(store.get())[0]!.candidate.regressors).toEqual([{ kind: 'step', at: 20 }]);
+    app.actions.undo();
+    expect(record().window).toEqual({ from: 0, to: 98 });
+  });
+
+  test('the link carries repairs; they are replayed on the same file and the numbers are the same', async () => {
+    await app.actions.repair({ kind: 'gaps', runs: [10, 3, 20, 1] }, 'frozen');
+    await until(store, allDone);
+    await app.actions.copySessionLink(false);
+    const other = createStore({ ...initialState, opening: false });
+    const page = createActions(other, directClient({ fits: null }), platform);
+    await page.actions.openText(copied.at(-1)!, 'link');
+    await page.actions.openText(csv(publishedSeries('lakeHuron')), 'renamed.csv');
+    await until(other, () => progressCounts(activeRows(other.get())).done === 3);
+    const opened = other.get().records[0]!;
+    expect(opened.repairs).toEqual(record().repairs);
+    expect(opened.seriesHash).toBe(record().seriesHash);
+    expect(
+      activeRows(other.get()).map(({ progress }) => (progress.kind === 'fitted' ? progress.fit.logLikelihood : null)),
+    ).toEqual(numbers());
+  });
+
+  test('another file does not get them silently', async () => {
+    await app.actions.repair({ kind: 'gap', from: 10, to: 13 }, '');
+    await app.actions.copySessionLink(false);
+    const other = createStore({ ...initialState, opening: false });
+    const page = createActions(other, directClient({ fits: null }), platform);
+    await page.actions.openText(copied.at(-1)!, 'link');
+    await page.actions.openText(csv(publishedSeries('nile')), 'nile.csv');
+    page.actions.acceptArrival();
+    await until(other, () => other.get().notices.some(({ text }) => /made to another record/.test(text)));
+    expect(other.get().records[0]!.repairs).toEqual([]);
+    await until(other, () => progressCounts(activeRows(other.get())).done === 3);
+  });
+});
+
 describe('links', () => {
   test('a link restores the candidates, asks for the record, knows it, and gives the same numbers', async () => {
     await app.actions.copySessionLink(false);
