@@ -8,6 +8,9 @@ const LEAST = 6;
 /** Rounds of finding the place, removing the step and whitening again. */
 const ROUNDS = 3;
 const MOST_STEPS = 5;
+/** In records longer than this a step worth a line shows at once, even through an autoregression that it has inflated. */
+const LONG = 20_000;
+const HOPELESS = 5;
 /** A step this near to an end cannot be told from a few odd readings. */
 const EDGE = 5;
 
@@ -65,8 +68,9 @@ export function findSteps(values: Float64Array, whitened: Whitened): Steps {
 }
 
 function oneStep(values: Float64Array, first: Whitened): { step: Step; whitened: Whitened } | null {
+  let step = largestStep(first);
+  if (values.length > LONG && (step === null || step.statistic < HOPELESS)) return null;
   let whitened = first;
-  let step = largestStep(whitened);
   for (let round = 0; round < ROUNDS && step !== null; round++) {
     const calmer = whitenRecord(without(values, step));
     if (calmer === null) return null;
@@ -110,7 +114,9 @@ function largestStep({ innovations: e, coefficients: a, scale }: Whitened): Step
       places++;
     }
     if (places < EDGE || count - places < EDGE) continue;
-    let [se, ss, sm] = [end * later, end * end * places, end * places];
+    let se = end * later;
+    let ss = end * end * places;
+    let sm = end * places;
     for (let k = 0; k < p && at + k < n; k++) {
       if (Number.isNaN(e[at + k]!)) continue;
       se += (c[k]! - end) * e[at + k]!;

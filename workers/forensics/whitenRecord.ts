@@ -1,7 +1,6 @@
 import { autocorrelation } from '../identification/autocorrelation.ts';
 import { levinson } from '../numeric/levinson.ts';
 import { sortedQuantile } from '../numeric/sortedQuantile.ts';
-import { medianOf } from './medianOf.ts';
 import { robustScale } from './robustScale.ts';
 
 /** A record as one-step-ahead errors of a plain autoregression. */
@@ -78,11 +77,29 @@ function scaleOf(innovations: Float64Array): number {
 }
 
 function withoutWild(values: Float64Array): Float64Array {
-  const local = values.map((value, t) =>
-    Number.isNaN(value) ? NaN : value - medianOf(values.subarray(Math.max(0, t - REACH), t + REACH + 1)),
-  );
+  const median = localMedian(values);
+  const local = values.map((value, t) => value - median[t]!);
   const limit = FAR * robustScale(local);
   return limit > 0 ? values.map((value, t) => (Math.abs(local[t]!) > limit ? NaN : value)) : values;
+}
+
+/** Median of the readings observed within REACH places; sorted by insertion, since a long record has half a million of them. */
+function localMedian(values: Float64Array): Float64Array {
+  const sorted = new Float64Array(2 * REACH + 1);
+  return values.map((_, t) => {
+    let count = 0;
+    const last = Math.min(values.length - 1, t + REACH);
+    for (let k = Math.max(0, t - REACH); k <= last; k++) {
+      const value = values[k]!;
+      if (Number.isNaN(value)) continue;
+      let i = count++;
+      for (; i > 0 && sorted[i - 1]! > value; i--) sorted[i] = sorted[i - 1]!;
+      sorted[i] = value;
+    }
+    const half = count >> 1;
+    if (count === 0) return NaN;
+    return count % 2 === 1 ? sorted[half]! : (sorted[half - 1]! + sorted[half]!) / 2;
+  });
 }
 
 /** How many readings have the p before them. */
