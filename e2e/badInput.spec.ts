@@ -52,7 +52,7 @@ const faulty: { name: string; text: string; says: RegExp }[] = [
   {
     name: 'twice.csv',
     text: ['time,flow', ...Array.from({ length: 40 }, (_, i) => row(i, String(i % 7))), row(39, '3')].join('\n'),
-    says: /1 row with a time that was there already/,
+    says: /1 row repeats a time with another reading/,
   },
 ];
 

@@ -11,6 +11,7 @@ import { EmptySheet } from './panels/record/EmptySheet.tsx';
 import { Masthead } from './panels/record/Masthead.tsx';
 import { RecordPanel } from './panels/record/RecordPanel.tsx';
 import { ShapePanel } from './panels/shape/ShapePanel.tsx';
+import { SweepPanel } from './panels/sweep/SweepPanel.tsx';
 import { activeRecord } from './state/selectors.ts';
 import { useActions, useAppState } from './state/useApp.ts';
 
@@ -79,6 +80,7 @@ export function App() {
             <div className="bench">
               <div className="left">
                 <CandidateTable record={record} />
+                <SweepPanel record={record} />
                 <SizeAndShape record={record} />
               </div>
               <Evidence record={record} />

@@ -67,9 +67,9 @@ export function noteSentence({ kind, count, lines, texts }: ReadingNote): string
     case 'duplicateTimes':
       return `${rows} whose place in time was taken already: one reading a place is kept${at}.`;
     case 'conflictingTimes':
-      return `${rows} repeat a time with another reading: ${repeatsKept[texts[0] ?? 'first']}${at}.`;
+      return `${rows} ${count === 1 ? 'repeats' : 'repeat'} a time with another reading: ${repeatsKept[texts[0] ?? 'first']}${at}.`;
     case 'sharedPlaces':
-      return `${rows} share a place of the grid with others: ${texts[0] === 'last' ? 'the latest is kept' : 'their mean is taken'}.`;
+      return `${rows} ${count === 1 ? 'shares' : 'share'} a place of the grid with others: ${texts[0] === 'last' ? 'the latest is kept' : 'their mean is taken'}.`;
     case 'reversedTimes':
       return `${rows} earlier than the row before: put in order${at}.`;
     case 'jitter':

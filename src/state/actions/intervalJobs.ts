@@ -62,7 +62,9 @@ export function createIntervalJobs(store: Store, client: CoreClient): IntervalJo
     const { fit } = row.progress;
     const { coverage } = state.view;
     place({ fit, about, fraction: 0, answer: null }, fit, about);
-    const isAwaited = () => store.get().checks.some((one) => one.fit === fit && one.about === about);
+    // A report may come after the answer: it must not take its place.
+    const isAwaited = () =>
+      store.get().checks.some((one) => one.fit === fit && one.about === about && one.answer === null);
     const progress = (fraction: number) => {
       if (isAwaited()) place({ fit, about, fraction, answer: null }, fit, about);
     };
