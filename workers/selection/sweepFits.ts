@@ -3,12 +3,16 @@ import type { Fit } from '../contract/fit.ts';
 import type { SweepReport, SweepRequest } from '../contract/selection.ts';
 import { fitCandidate } from '../estimation/fitCandidate.ts';
 import { isNested } from '../estimation/neighbourStarts.ts';
+import { centredSumOfSquares } from '../numeric/centredSumOfSquares.ts';
+import { mean } from '../numeric/mean.ts';
 import { allows, sizeOf } from './planSweep.ts';
 
 /** A candidate whose AIC cannot come within this of the best of its differencing is passed over. */
 const HOPELESS = 12;
 /** A candidate two coefficients beyond the best is passed over where everything one coefficient smaller is this far above it. */
 const TIRED = 8;
+/** A record farther from 0 than this many of its standard deviations is not modelled without a level: only a unit root could stand in for it. */
+const FAR_FROM_ZERO = 10;
 /** A larger fit this far below one nested in it is made again from there. */
 const SHORTFALL = 1e-6;
 
@@ -20,11 +24,18 @@ const SHORTFALL = 1e-6;
  * whose every neighbour with one fewer is 8 above it: one coefficient more would have to gain 5 in ln L. `walk`: from each start to the neighbour (one order more or
  * fewer, or another level) with the lowest AIC, until none is lower.
  *
+ * A record that lies far from 0 is not fitted without a level unless it is differenced.
+ *
  * @param request record, candidates and mode; @param report called after every fit with what is new
  */
 export function sweepFits(request: SweepRequest, report: (news: SweepReport) => void): void {
   const done: Fit[] = [];
+  const far = isFarFromZero(request.values.subarray(request.window?.from ?? 0, request.window?.to));
   const fit = (candidate: Candidate): Fit | null => {
+    if (far && needsLevel(candidate)) {
+      report({ fits: [], failed: 0, passedOver: 1 });
+      return null;
+    }
     const { values, window, columns, seed, seriesHash } = request;
     const made = fitCandidate({
       values,
@@ -46,6 +57,18 @@ export function sweepFits(request: SweepRequest, report: (news: SweepReport) => 
   };
   if (request.mode === 'walk') walk(request, fit);
   else goThrough(request.candidates, done, fit, report);
+}
+
+/** Without differencing, level, transform or input that could carry the mean of the record. */
+function needsLevel({ order, level, transform, regressors }: Candidate): boolean {
+  return level === 'none' && order.d + order.D === 0 && transform.kind === 'none' && regressors.length === 0;
+}
+
+function isFarFromZero(values: Float64Array): boolean {
+  const observed = values.filter((value) => !Number.isNaN(value));
+  const centre = mean(observed);
+  const spread = Math.sqrt(centredSumOfSquares(observed) / Math.max(1, observed.length - 1));
+  return Math.abs(centre) > FAR_FROM_ZERO * spread;
 }
 
 function goThrough(

@@ -116,6 +116,15 @@ describe('a sweep', () => {
     expect(listed.length + ranking.folded.length).toBe(last.length);
   });
 
+  it('does not fit a record far from zero without a level, except differenced', () => {
+    const shifted = values.map((value) => value + 100);
+    const range: SweepRange = { ...plain, p: [0, 1], q: [0, 1], d: [0, 1] };
+    const { fits, passedOver, failed } = sweep(shifted, range);
+    expect(fits.some(({ candidate }) => candidate.level === 'none' && candidate.order.d === 0)).toBe(false);
+    expect(fits.some(({ candidate }) => candidate.level === 'none' && candidate.order.d === 1)).toBe(true);
+    expect(new Set(fits.map(nameOf)).size + passedOver + failed).toBe(12);
+  });
+
   it('walks to the same best as going through', () => {
     const walked = sweep(values, plain, 'walk');
     const least = (fits: readonly Fit[]) => Math.min(...fits.map(({ criteria }) => criteria.aic));
