@@ -222,6 +222,7 @@ test('a missing row becomes a gap and the exact likelihood uses the rest', async
 });
 
 test('axe finds nothing serious, on the example and on the empty sheet', async ({ page }) => {
+  test.slow();
   for (const scheme of ['light', 'dark'] as const) {
     await page.emulateMedia({ colorScheme: scheme });
     await page.goto('/');
